@@ -1,0 +1,91 @@
+import type { Entry } from '../event/entry.ts';
+import type { FactOf } from '../event/facts.ts';
+import type { Moment } from '../unit/moment.ts';
+import { move, pick, settle, standsAfter, unfinished, type OpenConnector } from './connectors.ts';
+import { handsOnShareMs } from './hands-on.ts';
+import type { MisfitReason } from './misfit-reasons.ts';
+import type { OpenBatch } from './open-batch.ts';
+import { judges, limitedByMix, runsAsLoad } from './step-kinds.ts';
+
+type Of<Type extends Entry['type']> = Entry & FactOf<Type>;
+
+/** The connectors that an entry names, all standing at the step that it names. */
+function atStep(batch: OpenBatch, index: number, numbers: readonly number[]): OpenConnector[] | MisfitReason {
+  const picked = pick(batch.connectors, numbers);
+  if (typeof picked === 'string') return picked;
+  const all = picked.every(({ stands }) => stands.at === 'step' && stands.step === index);
+  return all ? picked : 'not at this step';
+}
+
+export function applyStepFinished(batch: OpenBatch, entry: Of<'stepFinished'>, at: Moment): MisfitReason | null {
+  const { data } = entry;
+  const index = batch.stepIndex(data.step);
+  const step = batch.recipe.steps[index];
+  if (!step) return 'no such step';
+  if (runsAsLoad(step)) return 'needs a load';
+  if (judges(step)) return 'needs a judgement';
+  if (step.kind === 'mix' && data.mix === undefined) return 'needs a mix';
+  if (step.kind !== 'mix' && data.mix !== undefined) return 'no mix here';
+  const picked = atStep(batch, index, data.connectors);
+  if (typeof picked === 'string') return picked;
+  const when = settle(picked, at);
+  if (!when) return 'earlier than what it follows';
+  const handsOnMs = handsOnShareMs(step, picked.length, data.gap);
+  const overrunS = data.overrun?.lateS ?? 0;
+  const overrunReason = data.overrun?.reason ?? null;
+  const releases = limitedByMix(batch.recipe, index);
+  const stands = standsAfter(batch.recipe, index);
+  for (const connector of picked) {
+    move(connector, stands, {
+      kind: 'finished',
+      step: index,
+      handsOnMs,
+      overrunS,
+      ...(data.overrun ? { overrunReason: data.overrun.reason } : {}),
+      at: when,
+      by: entry.by,
+      entry,
+    });
+    if (data.mix !== undefined) connector.mix = connector.mixSeen = data.mix;
+    else if (releases) connector.mix = null;
+  }
+  return null;
+}
+
+export function applyMixChanged(batch: OpenBatch, entry: Of<'mixChanged'>, at: Moment): MisfitReason | null {
+  const picked = pick(batch.connectors, entry.data.connectors);
+  if (typeof picked === 'string') return picked;
+  if (!picked.every((connector) => unfinished(connector) && connector.mix !== null)) return 'no mix here';
+  if (!settle(picked, at)) return 'earlier than what it follows';
+  for (const connector of picked) connector.mix = connector.mixSeen = entry.data.mix;
+  return null;
+}
+
+export function applyJudged(batch: OpenBatch, entry: Of<'judged'>, at: Moment): MisfitReason | null {
+  const { data } = entry;
+  const index = batch.stepIndex(data.step);
+  const step = batch.recipe.steps[index];
+  if (!step) return 'no such step';
+  if (!judges(step)) return 'not judged here';
+  if (data.verdict === 'fail' && data.defect === undefined) return 'defect missing';
+  const picked = atStep(batch, index, data.connectors);
+  if (typeof picked === 'string') return picked;
+  const when = settle(picked, at);
+  if (!when) return 'earlier than what it follows';
+  const handsOnMs = handsOnShareMs(step, picked.length, data.gap);
+  const defect = data.defect ?? null;
+  for (const connector of picked) {
+    const stands = data.verdict === 'pass' ? standsAfter(batch.recipe, index) : connector.stands;
+    move(connector, stands, {
+      kind: 'judged',
+      step: index,
+      verdict: data.verdict,
+      defect,
+      handsOnMs,
+      at: when,
+      by: entry.by,
+      entry,
+    });
+  }
+  return null;
+}
