@@ -1,0 +1,39 @@
+import type { Batch } from '../core/batch/types.ts';
+import type { Command } from '../core/command/commands.ts';
+import type { Words } from '../words/index.ts';
+import type { GroupView } from './batch-view.ts';
+
+/** What one tap does: a command that needs nothing more, or the batch page, where something must be asked or judged. */
+export type RowAction =
+  | { readonly does: 'command'; readonly label: string; readonly command: Command }
+  | { readonly does: 'open'; readonly label: string };
+
+/** The one action of a row. It commands only what cannot be a mistake of more than one undo. */
+export function rowAction(batch: Batch, view: GroupView | undefined, words: Words, newId: () => string): RowAction {
+  const say = words.bench.action;
+  if (batch.held) return { does: 'open', label: words.bench.open };
+  if (!view) return { does: 'command', label: say.closeBatch, command: { type: 'close batch', batch: batch.id } };
+  const { step, group, reading } = view;
+  if (group.at === 'load') {
+    const ready = reading?.state === 'done';
+    const label = step.kind === 'cure' ? say.trayOut : step.kind === 'polish' ? say.endFilm : say.goOn;
+    if (!ready) return { does: 'open', label: words.bench.open };
+    return {
+      does: 'command',
+      label,
+      command: { type: 'end load', batch: batch.id, load: group.load.id, nextLoad: newId() },
+    };
+  }
+  switch (step.kind) {
+    case 'cure':
+      return { does: 'open', label: say.trayIn };
+    case 'mix':
+      return { does: 'open', label: say.mix };
+    case 'inspect':
+      return { does: 'open', label: say.inspect };
+    case 'measure':
+      return { does: 'open', label: say.measure };
+    default:
+      return { does: 'open', label: words.bench.open };
+  }
+}

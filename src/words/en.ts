@@ -1,0 +1,10 @@
+import { alarm } from './en/alarm.ts';
+import { batch } from './en/batch.ts';
+import { bench } from './en/bench.ts';
+import { cautions } from './en/cautions.ts';
+import { common } from './en/common.ts';
+import { newBatch } from './en/new-batch.ts';
+import { refusal } from './en/refusal.ts';
+
+/** Every word of the interface, in English. Recipe texts carry their languages in the recipe. */
+export const en = { common, bench, batch, newBatch, alarm, cautions, refusal };
