@@ -7,6 +7,8 @@ import type { Refusal } from '../core/command/refusal.ts';
 import { benchNow } from '../core/event/bench-time.ts';
 import { benchWide, type Draft, type Entry, type Head, type Line } from '../core/event/entry.ts';
 import { makeLines } from '../core/event/line.ts';
+import { readSummaryRow } from '../core/review/read-summary-row.ts';
+import { summaryKeysFrom, summaryRow, type SummaryRow } from '../core/review/summary-row.ts';
 import type { Moment } from '../core/unit/moment.ts';
 import { failed, ok, type Result } from '../core/unit/result.ts';
 import type { LogStore } from '../log/store.ts';
@@ -145,6 +147,29 @@ export class BenchLog {
         bench: { ...this.bench, entries: { ...this.bench.entries, [benchWide]: entries } },
       });
       return entries;
+    });
+  }
+
+  /**
+   * What closed batches left behind that can tell of something at `fromWallMs` or later. A row of another version, or
+   * a damaged one, is made anew from the lines of its batch.
+   */
+  async summaryRows(fromWallMs: number): Promise<readonly SummaryRow[]> {
+    const { store } = this.#options;
+    const { lower, upper } = summaryKeysFrom(fromWallMs);
+    return this.#inTurn(async () => {
+      const rows: SummaryRow[] = [];
+      for (const { key, value } of await store.derivedBetween(lower, upper)) {
+        const read = readSummaryRow(value);
+        if (read.ok) rows.push(read.value);
+        else {
+          const id = key.split(':').slice(2).join(':');
+          const { batch } = foldBatch(readLines(await store.linesOfBatch(id)).entries, this.bench.wide.recipes);
+          const row = batch && summaryRow(batch);
+          if (row) rows.push(row);
+        }
+      }
+      return rows;
     });
   }
 

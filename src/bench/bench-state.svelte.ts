@@ -7,6 +7,7 @@ import { readClock, type Reading } from '../core/timer/reading.ts';
 import type { Clock } from '../core/timer/clock.ts';
 import type { Moment } from '../core/unit/moment.ts';
 import type { Answer, BenchLog, NotSaved } from './bench-log.ts';
+import { ShiftSoFar } from './shift-so-far.svelte.ts';
 
 /** Whether what was tapped is on the disk. */
 export type Saving =
@@ -28,13 +29,18 @@ export class BenchState {
   /** All running clocks, the most urgent first. */
   readonly readings: readonly Reading[] = $derived(byAttention(this.clocks.map((clock) => readClock(clock, this.now))));
 
-  /** Of the open batches alone: cheap enough for the bench page; the shift page reads the closed ones too. */
-  readonly shiftSoFar = $derived({ passed: 0, sentBack: 0 });
+  readonly #soFar: ShiftSoFar;
 
   constructor(log: BenchLog) {
     this.#log = log;
     this.#look();
     log.subscribe(() => this.#look());
+    this.#soFar = new ShiftSoFar(this);
+  }
+
+  /** Of the shift that runs, from open and closed batches. */
+  get shiftSoFar(): { readonly passed: number; readonly sentBack: number } {
+    return this.#soFar.numbers;
   }
 
   get log(): BenchLog {

@@ -25,7 +25,8 @@ function upgrade(database: LogDatabase, from: number): void {
 
 /**
  * Opens the database of that name, made where there is none. Refuses one of a newer version, and one that another window
- * holds in an older version. When a newer version wants in, the connection is closed at once.
+ * holds in an older version. When another window wants a newer version, or the database removed, this connection is
+ * closed at once.
  */
 export function openDatabase(
   name: string,
@@ -40,9 +41,9 @@ export function openDatabase(
         refused = true;
         reject(new StoreError({ kind: 'blocked' }));
       },
-      blocking: (_current, _blocked, event) => {
+      blocking: (_current, wanted, event) => {
         (event.target as IDBDatabase).close();
-        gone('newer version');
+        gone(wanted === null ? 'removed' : 'newer version');
       },
       terminated: () => gone('terminated'),
     }).then(
@@ -53,7 +54,10 @@ export function openDatabase(
   });
 }
 
-/** Removes a database with all that is in it. Refused while another window holds it open. */
+/**
+ * Removes a database with all that is in it. Rejects as `blocked` where another window does not let go of it; it is then
+ * removed as soon as that window closes.
+ */
 export function removeDatabase(name: string): Promise<void> {
   return new Promise((resolve, reject) => {
     deleteDB(name, { blocked: () => reject(new StoreError({ kind: 'blocked' })) }).then(resolve, (error: unknown) =>

@@ -46,6 +46,8 @@ async function append(
   checkAppend(expected, lines, head);
   // Strict: "complete" comes after the flush to the disk, not before it.
   const transaction = database.transaction(['lines', 'heads', 'derived'], 'readwrite', { durability: 'strict' });
+  // Where a request fails first, that one tells.
+  transaction.done.catch(() => {});
   const kept = transaction.objectStore('lines');
   const stored = readHeadRow(await transaction.objectStore('heads').get(head.log));
   if (!standsAt(expected, stored)) {

@@ -21,10 +21,11 @@ const compareIds = (a: EntryId, b: EntryId): number => compareText(a.log, b.log)
 /** A store that lives as long as the page: for tests, for the command line, for a browser without a database. */
 export function memoryStore(memory: Memory = emptyMemory()): LogStore {
   let open = true;
-  const whileOpen = async <Value>(run: () => Value): Promise<Value> => {
-    if (!open) throw new StoreError({ kind: 'broken', doing: 'read', name: 'closed' });
-    return run();
-  };
+  const whileOpen = <Value>(run: () => Value): Promise<Value> =>
+    new Promise((resolve) => {
+      if (!open) throw new StoreError({ kind: 'broken', doing: 'read', name: 'closed' });
+      resolve(run());
+    });
 
   function writeDerived(rows: readonly Derived[]): void {
     for (const row of rows) {

@@ -39,8 +39,8 @@ export interface LogStore {
   close(): void;
 }
 
-/** Why a store was closed from outside: the browser lost it, or another window opens a newer version of it. */
-export type Gone = 'terminated' | 'newer version';
+/** Why a store was closed from outside: the browser lost it, or another window opens a newer version, or removes it. */
+export type Gone = 'terminated' | 'newer version' | 'removed';
 
 /** Opens a store; `gone` is called when it is closed from outside. */
 export type OpenStore = (gone: (why: Gone) => void) => Promise<LogStore>;

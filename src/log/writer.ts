@@ -114,6 +114,7 @@ class LockWriter implements Writer {
     });
     // A request that was held and is rejected was stolen; one that only stood in the queue was withdrawn.
     held.catch(() => {
+      answer(false);
       if (release !== null && this.#release === release) void this.#lose();
     });
   }

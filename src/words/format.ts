@@ -9,6 +9,11 @@ export function timeOfDay(wallMs: number, offsetMinutes: number): string {
   return `${pad(Math.floor(ofDay / 60))}:${pad(ofDay % 60)}`;
 }
 
+/** Date "YYYY-MM-DD" at a zone offset in minutes east of UTC. */
+export function dateOf(wallMs: number, offsetMinutes: number): string {
+  return new Date(wallMs + offsetMinutes * 60_000).toISOString().slice(0, 10);
+}
+
 /** A span as a person says it: "45 s", "12 min", "1 h 05 min". Rounded down, so that nothing is promised too long. */
 export function span(ms: number): string {
   const seconds = Math.floor(Math.abs(ms) / 1000);

@@ -65,6 +65,9 @@ export function appendContract({ test }: Runner, makePlace: MakePlace): void {
     const store = await openNew();
     equal(await store.append(first.head, second.lines, second.head, summary('two')), 'moved');
     await store.append(null, first.lines, first.head, []);
+    const elsewhere = linesAfter(null, [held('b1', 'other'), held('b2', 'history')]);
+    const onwards = linesAfter(elsewhere.head, [held('b1', 'of another history')]);
+    equal(await store.append(elsewhere.head, onwards.lines, onwards.head, []), 'moved');
     const ahead = linesAfter(second.head, [held('b1', 'ahead')]);
     equal(await store.append(second.head, ahead.lines, ahead.head, []), 'moved');
     equal(await store.lines(), first.lines);
@@ -114,7 +117,7 @@ export function appendContract({ test }: Runner, makePlace: MakePlace): void {
 
   test('an append that no store may take is refused, and nothing is written', async () => {
     const store = await openNew();
-    const other = linesAfter(null, [held('b1', 'lunch')], 'log-b');
+    const other = linesAfter(null, [held('b1', 'lunch'), held('b2', 'lunch')], 'log-b');
     const wrong: [Head | null, typeof first.lines, Head][] = [
       [null, [], first.head],
       [null, first.lines.slice(1), first.head],

@@ -46,7 +46,7 @@ test('law: any arrival order and any duplication give the same list', () => {
       expect(inOrder(arrived)).toEqual(inOrder(set));
       expect(inOrder(arrived)).toHaveLength(set.length);
     }),
-    { numRuns: 300 },
+    { numRuns: 150 },
   );
 });
 
@@ -63,7 +63,7 @@ test('law: the order is total: no two different entries are equal, and each trip
         }
       }
     }),
-    { numRuns: 40 },
+    { numRuns: 20 },
   );
 });
 

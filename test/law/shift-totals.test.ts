@@ -10,9 +10,23 @@ import { earliestMs, randomBatches } from '../core/review/random-batches.ts';
 const runs = { numRuns: 120 };
 const hourMs = 3_600_000;
 
-/** Borders around everything that a random batch does. */
-const border = fc.integer({ min: -6, max: 48 }).map((hours) => earliestMs + hours * hourMs);
-const borders = fc.tuple(border, border, border).map((three) => three.sort((a, b) => a - b));
+type Borders = readonly [number, number, number];
+
+/** Three borders in order: full hours around everything that happens, or the very instants at which something does. */
+const bordersOf = (batches: readonly Batch[], dice: readonly number[]): Borders => {
+  const instants = batches.flatMap(({ opened, connectors, loads }) => [
+    opened.wall,
+    ...connectors.map(({ since }) => since.wall),
+    ...loads.flatMap(({ ended }) => ended?.at.wall ?? []),
+  ]);
+  const [a = 0, b = 0, c = 0] = dice
+    .map(
+      (die) => (die % 2 === 0 ? instants[die % instants.length] : undefined) ?? earliestMs + ((die % 54) - 6) * hourMs,
+    )
+    .sort((one, other) => one - other);
+  return [a, b, c];
+};
+const dice = fc.array(fc.nat(9999), { minLength: 3, maxLength: 3 });
 
 const rowsOf = (batches: readonly Batch[]): SummaryRow[] => batches.flatMap((batch) => summaryRow(batch) ?? []);
 const openOf = (batches: readonly Batch[]): Batch[] => batches.filter(({ closed }) => !closed);
@@ -57,7 +71,8 @@ describe('shift totals add up', () => {
 
   test('carried in + started = passed + scrapped + in work, in any window and recipe', () => {
     fc.assert(
-      fc.property(randomBatches, borders, (batches, [from = 0, , to = 0]) => {
+      fc.property(randomBatches, dice, (batches, thrown) => {
+        const [from, , to] = bordersOf(batches, thrown);
         const shift = review(batches, from, to);
         for (const totals of [shift, ...shift.byRecipe]) {
           expect(totals.carriedIn + totals.started).toBe(totals.passed + totals.scrapped + totals.inWork);
@@ -88,7 +103,8 @@ describe('shift totals add up', () => {
 
   test('by recipe sums to all', () => {
     fc.assert(
-      fc.property(randomBatches, borders, (batches, [from = 0, , to = 0]) => {
+      fc.property(randomBatches, dice, (batches, thrown) => {
+        const [from, , to] = bordersOf(batches, thrown);
         const shift = review(batches, from, to);
         const withOpen = (totals: Totals) => [
           ...countsOf(totals),
@@ -109,7 +125,8 @@ describe('shift totals add up', () => {
 
   test('two adjacent windows sum to the window over both', () => {
     fc.assert(
-      fc.property(randomBatches, borders, (batches, [from = 0, middle = 0, to = 0]) => {
+      fc.property(randomBatches, dice, (batches, thrown) => {
+        const [from, middle, to] = bordersOf(batches, thrown);
         const first = review(batches, from, middle);
         const second = review(batches, middle, to);
         const both = review(batches, from, to);
@@ -129,7 +146,8 @@ describe('shift totals add up', () => {
 
   test('every scrapped connector has its cause, and no median lies outside its values', () => {
     fc.assert(
-      fc.property(randomBatches, borders, (batches, [from = 0, , to = 0]) => {
+      fc.property(randomBatches, dice, (batches, thrown) => {
+        const [from, , to] = bordersOf(batches, thrown);
         const shift = review(batches, from, to);
         expect(shift.scraps.reduce((sum, { connectors }) => sum + connectors, 0)).toBe(shift.scrapped);
         const total = shift.cycle.passed?.total;
@@ -141,7 +159,8 @@ describe('shift totals add up', () => {
 
   test('rows in any order, and a batch read from its row or from its state, give the same shift', () => {
     fc.assert(
-      fc.property(randomBatches, borders, (batches, [from = 0, , to = 0]) => {
+      fc.property(randomBatches, dice, (batches, thrown) => {
+        const [from, , to] = bordersOf(batches, thrown);
         const shift = shiftOf(rowsOf(batches), openOf(batches), from, to);
         expect(shiftOf(rowsOf(batches).reverse(), openOf(batches).reverse(), from, to)).toEqual(shift);
         expect(shiftOf([], batches, from, to)).toEqual(shift);

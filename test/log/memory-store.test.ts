@@ -4,15 +4,16 @@ import { steadyStore } from '../../src/log/steady-store.ts';
 import { logStoreContract, type StorePlace } from '../contract/log-store.ts';
 import { fakeClock } from '../fake/clock.ts';
 
-async function memoryPlace(): Promise<StorePlace> {
+function memoryPlace(): Promise<StorePlace> {
   const memory = emptyMemory();
-  return {
-    open: async () => memoryStore(memory),
-    plant: async (kind, row) => {
+  return Promise.resolve({
+    open: () => Promise.resolve(memoryStore(memory)),
+    plant: (kind, row) => {
       const { log, seq, key } = row as { log: string; seq: number; key: string };
       memory[kind].set({ lines: memoryKey({ log, seq }), heads: log, derived: key }[kind], row);
+      return Promise.resolve();
     },
-  };
+  });
 }
 
 describe('contract: memory store', () => {
@@ -22,6 +23,6 @@ describe('contract: memory store', () => {
 describe('contract: steady store over a memory store', () => {
   logStoreContract({ test }, async () => {
     const place = await memoryPlace();
-    return { ...place, open: async () => steadyStore(() => place.open(), { after: fakeClock().after }) };
+    return { ...place, open: () => Promise.resolve(steadyStore(() => place.open(), { after: fakeClock().after })) };
   });
 });

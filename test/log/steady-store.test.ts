@@ -12,7 +12,7 @@ const second = linesAfter(first.head, [held('b1', 'fire drill')]);
 
 function steady(faults: readonly (Fault | null)[], faultsOfOpening: readonly (Fault | null)[] = []) {
   const memory = emptyMemory();
-  const openMemory: OpenStore = async () => memoryStore(memory);
+  const openMemory: OpenStore = () => Promise.resolve(memoryStore(memory));
   const clock = fakeClock();
   const { open, opened } = faultyOpener(openMemory, faults, faultsOfOpening);
   const went: string[] = [];
@@ -216,4 +216,11 @@ test('a closed store opens nothing anew', async () => {
   await expect(bench.store.count()).rejects.toBeInstanceOf(StoreError);
   await expect(append(bench, second)).rejects.toBeInstanceOf(NotSavedError);
   expect(bench.opened.map(({ closed }) => closed)).toEqual([true]);
+});
+
+test('two uses that find the same connection dead open one new one', async () => {
+  const fault: Fault = { what: 'lost', name: 'InvalidStateError' };
+  const bench = steady([fault, fault]);
+  expect(await Promise.all([bench.store.count(), bench.store.count()])).toEqual([0, 0]);
+  expect(bench.opened.map(({ closed }) => closed)).toEqual([true, false]);
 });

@@ -5,6 +5,7 @@ import { shifted, type Moment } from '../unit/moment.ts';
 import { applyLoadEnded, applyLoadStarted } from './apply-load.ts';
 import { applyJudged, applyMixChanged, applyStepFinished } from './apply-step.ts';
 import { applyBatchClosed, applyScrapped, applySentBack } from './apply-trouble.ts';
+import type { Happened } from './connectors.ts';
 import type { MisfitReason } from './misfit-reasons.ts';
 import { stepIndexIn, type OpenBatch } from './open-batch.ts';
 import type { Trace } from './types.ts';
@@ -56,7 +57,7 @@ export function applyToBatch(batch: OpenBatch, entry: Entry): void {
   const ago = 'ago' in entry.data ? (entry.data.ago ?? 0) : 0;
   const entered = enteredAt(entry);
   const at = ago === 0 ? entered : shifted(entered, -ago * 1000);
-  const misfit = refusal(batch, entry) ?? change(batch, entry, at);
+  const misfit = refusal(batch, entry) ?? change(batch, entry, { at, late: ago > 0 });
   if (misfit) batch.misfits.push({ entry: { log: entry.log, seq: entry.seq }, type: entry.type, why: misfit });
   else batch.traces.push(traceOf(batch, entry, at, entered));
 }
@@ -67,27 +68,27 @@ function refusal(batch: OpenBatch, entry: Entry): MisfitReason | null {
   return null;
 }
 
-function change(batch: OpenBatch, entry: Entry, at: Moment): MisfitReason | null {
+function change(batch: OpenBatch, entry: Entry, happened: Happened): MisfitReason | null {
   switch (entry.type) {
     case 'stepFinished':
-      return applyStepFinished(batch, entry, at);
+      return applyStepFinished(batch, entry, happened);
     case 'loadStarted':
-      return applyLoadStarted(batch, entry, at);
+      return applyLoadStarted(batch, entry, happened);
     case 'loadEnded':
-      return applyLoadEnded(batch, entry, at);
+      return applyLoadEnded(batch, entry, happened);
     case 'judged':
-      return applyJudged(batch, entry, at);
+      return applyJudged(batch, entry, happened);
     case 'sentBack':
-      return applySentBack(batch, entry, at);
+      return applySentBack(batch, entry, happened);
     case 'scrapped':
-      return applyScrapped(batch, entry, at);
+      return applyScrapped(batch, entry, happened);
     case 'mixChanged':
-      return applyMixChanged(batch, entry, at);
+      return applyMixChanged(batch, entry, happened);
     case 'clockSeen':
-      batch.seen = { ...batch.seen, [entry.data.clock]: { at, lateS: entry.data.lateS } };
+      batch.seen = { ...batch.seen, [entry.data.clock]: { at: happened.at, lateS: entry.data.lateS } };
       return null;
     case 'batchHeld':
-      batch.held = { reason: entry.data.reason, since: at };
+      batch.held = { reason: entry.data.reason, since: happened.at };
       return null;
     case 'batchResumed':
       if (!batch.held) return 'batch not held';
@@ -97,7 +98,7 @@ function change(batch: OpenBatch, entry: Entry, at: Moment): MisfitReason | null
       batch.tag = entry.data.tag;
       return null;
     case 'batchClosed':
-      return applyBatchClosed(batch, entry, at);
+      return applyBatchClosed(batch, entry, happened);
     case 'batchOpened':
       return 'batch opened twice';
     default:

@@ -1,26 +1,26 @@
 import type { Entry } from '../event/entry.ts';
 import type { FactOf } from '../event/facts.ts';
-import type { Moment } from '../unit/moment.ts';
+import { isTimed } from '../recipe/read.ts';
 import { elapsedMs } from '../unit/moment.ts';
-import { move, pick, settle, standsAfter } from './connectors.ts';
+import { move, pick, settle, standsAfter, type Happened } from './connectors.ts';
 import { handsOnShareMs } from './hands-on.ts';
 import type { MisfitReason } from './misfit-reasons.ts';
 import type { OpenBatch } from './open-batch.ts';
-import { limitedByMix, runsAsLoad, unattended } from './step-kinds.ts';
+import { limitedByMix, unattended } from './step-kinds.ts';
 
 type Of<Type extends Entry['type']> = Entry & FactOf<Type>;
 
-export function applyLoadStarted(batch: OpenBatch, entry: Of<'loadStarted'>, at: Moment): MisfitReason | null {
+export function applyLoadStarted(batch: OpenBatch, entry: Of<'loadStarted'>, happened: Happened): MisfitReason | null {
   const { data } = entry;
   const index = batch.stepIndex(data.step);
   const step = batch.recipe.steps[index];
   if (!step) return 'no such step';
-  if (!runsAsLoad(step)) return 'not a load step';
+  if (!isTimed(step)) return 'not a load step';
   if (batch.loads.some((load) => load.id === data.load)) return 'load known already';
   const picked = pick(batch.connectors, data.connectors);
   if (typeof picked === 'string') return picked;
   for (const { stands } of picked) if (stands.at !== 'step' || stands.step !== index) return 'not at this step';
-  const when = settle(picked, at);
+  const when = settle(picked, happened);
   if (!when) return 'earlier than what it follows';
   const handsOnMs = handsOnShareMs(step, picked.length, data.gap);
   for (const connector of picked) {
@@ -43,7 +43,7 @@ export function applyLoadStarted(batch: OpenBatch, entry: Of<'loadStarted'>, at:
   return null;
 }
 
-export function applyLoadEnded(batch: OpenBatch, entry: Of<'loadEnded'>, at: Moment): MisfitReason | null {
+export function applyLoadEnded(batch: OpenBatch, entry: Of<'loadEnded'>, happened: Happened): MisfitReason | null {
   const { data } = entry;
   const position = batch.loads.findIndex((load) => load.id === data.load);
   const load = batch.loads[position];
@@ -52,7 +52,7 @@ export function applyLoadEnded(batch: OpenBatch, entry: Of<'loadEnded'>, at: Mom
   const step = batch.recipe.steps[load.step];
   if (!step) return 'no such step';
   const inside = batch.connectors.filter((one) => one.stands.at === 'load' && one.stands.load === data.load);
-  const when = settle(inside, at);
+  const when = settle(inside, happened);
   if (!when) return 'earlier than what it follows';
   const handsOnMs = unattended(step) ? 0 : handsOnShareMs(step, Math.max(1, inside.length), data.gap);
   const spanMs = elapsedMs(load.from, when);

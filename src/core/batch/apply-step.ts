@@ -1,11 +1,11 @@
 import type { Entry } from '../event/entry.ts';
 import type { FactOf } from '../event/facts.ts';
-import type { Moment } from '../unit/moment.ts';
-import { move, pick, settle, standsAfter, unfinished, type OpenConnector } from './connectors.ts';
+import { isTimed } from '../recipe/read.ts';
+import { move, pick, settle, standsAfter, unfinished, type Happened, type OpenConnector } from './connectors.ts';
 import { handsOnShareMs } from './hands-on.ts';
 import type { MisfitReason } from './misfit-reasons.ts';
 import type { OpenBatch } from './open-batch.ts';
-import { judges, limitedByMix, runsAsLoad } from './step-kinds.ts';
+import { judges, limitedByMix } from './step-kinds.ts';
 
 type Of<Type extends Entry['type']> = Entry & FactOf<Type>;
 
@@ -17,22 +17,25 @@ function atStep(batch: OpenBatch, index: number, numbers: readonly number[]): Op
   return all ? picked : 'not at this step';
 }
 
-export function applyStepFinished(batch: OpenBatch, entry: Of<'stepFinished'>, at: Moment): MisfitReason | null {
+export function applyStepFinished(
+  batch: OpenBatch,
+  entry: Of<'stepFinished'>,
+  happened: Happened,
+): MisfitReason | null {
   const { data } = entry;
   const index = batch.stepIndex(data.step);
   const step = batch.recipe.steps[index];
   if (!step) return 'no such step';
-  if (runsAsLoad(step)) return 'needs a load';
+  if (isTimed(step)) return 'needs a load';
   if (judges(step)) return 'needs a judgement';
   if (step.kind === 'mix' && data.mix === undefined) return 'needs a mix';
   if (step.kind !== 'mix' && data.mix !== undefined) return 'no mix here';
   const picked = atStep(batch, index, data.connectors);
   if (typeof picked === 'string') return picked;
-  const when = settle(picked, at);
+  const when = settle(picked, happened);
   if (!when) return 'earlier than what it follows';
   const handsOnMs = handsOnShareMs(step, picked.length, data.gap);
   const overrunS = data.overrun?.lateS ?? 0;
-  const overrunReason = data.overrun?.reason ?? null;
   const releases = limitedByMix(batch.recipe, index);
   const stands = standsAfter(batch.recipe, index);
   for (const connector of picked) {
@@ -52,16 +55,16 @@ export function applyStepFinished(batch: OpenBatch, entry: Of<'stepFinished'>, a
   return null;
 }
 
-export function applyMixChanged(batch: OpenBatch, entry: Of<'mixChanged'>, at: Moment): MisfitReason | null {
+export function applyMixChanged(batch: OpenBatch, entry: Of<'mixChanged'>, happened: Happened): MisfitReason | null {
   const picked = pick(batch.connectors, entry.data.connectors);
   if (typeof picked === 'string') return picked;
   if (!picked.every((connector) => unfinished(connector) && connector.mix !== null)) return 'no mix here';
-  if (!settle(picked, at)) return 'earlier than what it follows';
+  if (!settle(picked, happened)) return 'earlier than what it follows';
   for (const connector of picked) connector.mix = connector.mixSeen = entry.data.mix;
   return null;
 }
 
-export function applyJudged(batch: OpenBatch, entry: Of<'judged'>, at: Moment): MisfitReason | null {
+export function applyJudged(batch: OpenBatch, entry: Of<'judged'>, happened: Happened): MisfitReason | null {
   const { data } = entry;
   const index = batch.stepIndex(data.step);
   const step = batch.recipe.steps[index];
@@ -70,11 +73,12 @@ export function applyJudged(batch: OpenBatch, entry: Of<'judged'>, at: Moment): 
   if (data.verdict === 'fail' && data.defect === undefined) return 'defect missing';
   const picked = atStep(batch, index, data.connectors);
   if (typeof picked === 'string') return picked;
-  const when = settle(picked, at);
+  const when = settle(picked, happened);
   if (!when) return 'earlier than what it follows';
   const handsOnMs = handsOnShareMs(step, picked.length, data.gap);
   const defect = data.defect ?? null;
   for (const connector of picked) {
+    if (data.verdict === 'pass' && limitedByMix(batch.recipe, index)) connector.mix = null;
     const stands = data.verdict === 'pass' ? standsAfter(batch.recipe, index) : connector.stands;
     move(connector, stands, {
       kind: 'judged',

@@ -1,7 +1,7 @@
 import type { Entry } from '../event/entry.ts';
 import type { FactOf } from '../event/facts.ts';
+import { move, pick, settle, unfinished, type Happened, type OpenConnector } from './connectors.ts';
 import type { Moment } from '../unit/moment.ts';
-import { move, pick, settle, unfinished, type OpenConnector } from './connectors.ts';
 import type { MisfitReason } from './misfit-reasons.ts';
 import type { OpenBatch } from './open-batch.ts';
 
@@ -24,7 +24,7 @@ function emptyLoads(batch: OpenBatch, at: Moment, by: string): void {
   });
 }
 
-export function applySentBack(batch: OpenBatch, entry: Of<'sentBack'>, at: Moment): MisfitReason | null {
+export function applySentBack(batch: OpenBatch, entry: Of<'sentBack'>, happened: Happened): MisfitReason | null {
   const { data } = entry;
   const to = batch.stepIndex(data.to);
   if (to < 0) return 'no such step';
@@ -36,7 +36,7 @@ export function applySentBack(batch: OpenBatch, entry: Of<'sentBack'>, at: Momen
     const earlier = connector.stands.at === 'load' ? to <= from : to < from;
     if (!earlier) return 'target not earlier';
   }
-  const when = settle(picked, at);
+  const when = settle(picked, happened);
   if (!when) return 'earlier than what it follows';
   for (const connector of picked) {
     const from = stepNow(connector);
@@ -55,26 +55,28 @@ export function applySentBack(batch: OpenBatch, entry: Of<'sentBack'>, at: Momen
   return null;
 }
 
-export function applyScrapped(batch: OpenBatch, entry: Of<'scrapped'>, at: Moment): MisfitReason | null {
+export function applyScrapped(batch: OpenBatch, entry: Of<'scrapped'>, happened: Happened): MisfitReason | null {
   const { data } = entry;
   const picked = pick(batch.connectors, data.connectors);
   if (typeof picked === 'string') return picked;
   if (!picked.every(unfinished)) return 'already finished';
-  const when = settle(picked, at);
+  const when = settle(picked, happened);
   if (!when) return 'earlier than what it follows';
   for (const connector of picked) scrap(connector, data.defect, when, entry);
   emptyLoads(batch, when, entry.by);
   return null;
 }
 
-export function applyBatchClosed(batch: OpenBatch, entry: Of<'batchClosed'>, at: Moment): MisfitReason | null {
+export function applyBatchClosed(batch: OpenBatch, entry: Of<'batchClosed'>, happened: Happened): MisfitReason | null {
   const { how, defect } = entry.data;
   const rest = batch.connectors.filter(unfinished);
   if (how === 'complete' && rest.length > 0) return 'connectors unfinished';
   if (how === 'short' && rest.length > 0 && defect === undefined) return 'defect missing';
-  for (const connector of rest) scrap(connector, defect ?? '', at, entry);
-  emptyLoads(batch, at, entry.by);
-  batch.closed = { how, at };
+  const when = settle(rest, happened);
+  if (!when) return 'earlier than what it follows';
+  for (const connector of rest) scrap(connector, defect ?? '', when, entry);
+  emptyLoads(batch, when, entry.by);
+  batch.closed = { how, at: when };
   return null;
 }
 

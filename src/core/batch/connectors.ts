@@ -34,17 +34,24 @@ export function pick(connectors: readonly OpenConnector[], numbers: readonly num
 }
 
 /**
- * When something happened to these connectors, or null where that would be before what it follows.
- * Across logs only wall clocks compare, which may differ: there the later of the two is taken.
+ * When something happened to these connectors, or null where a late entry says a time before what it follows.
+ * Two tablets' wall clocks may differ, so an entry made now that seems to lie before is taken as happening then:
+ * work is never lost to a clock that is behind.
  */
-export function settle(connectors: readonly OpenConnector[], at: Moment): Moment | null {
+export function settle(connectors: readonly OpenConnector[], { at, late }: Happened): Moment | null {
   let settled = at;
   for (const { since } of connectors) {
     if (compareMoments(settled, since) >= 0) continue;
-    if (settled.log === since.log) return null;
-    settled = { ...settled, bench: settled.bench + (since.wall - settled.wall), wall: since.wall };
+    if (late && at.log === since.log) return null;
+    settled = since;
   }
   return settled;
+}
+
+/** When an entry says that it happened, and whether it was entered later. */
+export interface Happened {
+  readonly at: Moment;
+  readonly late: boolean;
 }
 
 /** Moves a connector and remembers why. */

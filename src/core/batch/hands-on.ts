@@ -1,3 +1,4 @@
+import { standardSecondsOf } from '../recipe/read.ts';
 import type { Step } from '../recipe/schema.ts';
 
 /** How many standard times an entry may claim at most; what is longer was something else. */
@@ -10,6 +11,5 @@ const mostStandards = 3;
  */
 export function handsOnShareMs(step: Step, connectors: number, gapS: number | undefined): number {
   if (gapS === undefined) return 0;
-  const standardS = step.standard.setupS + step.standard.eachS * connectors;
-  return (Math.min(gapS, mostStandards * standardS) * 1000) / connectors;
+  return (Math.min(gapS, mostStandards * standardSecondsOf(step, connectors)) * 1000) / connectors;
 }

@@ -1,10 +1,5 @@
 import type { Recipe, Step } from '../recipe/schema.ts';
 
-/** Steps that have a beginning and an end of their own and a clock between them. */
-export function runsAsLoad(step: Step): boolean {
-  return step.kind === 'cure' || step.kind === 'wait' || (step.kind === 'polish' && step.until.kind === 'time');
-}
-
 /** Steps that nobody tends: their time is cure time, not hands-on time. */
 export function unattended(step: Step): boolean {
   return step.kind === 'cure' || step.kind === 'wait';

@@ -1,8 +1,8 @@
-import { runsAsLoad } from '../batch/step-kinds.ts';
 import type { Batch, Bench, Load } from '../batch/types.ts';
 import { cureOf } from '../cure/cure.ts';
 import type { Draft } from '../event/entry.ts';
 import type { FactOf } from '../event/facts.ts';
+import { isTimed } from '../recipe/read.ts';
 import type { Step } from '../recipe/schema.ts';
 import { elapsedMs, type Moment } from '../unit/moment.ts';
 import { ok } from '../unit/result.ts';
@@ -28,7 +28,7 @@ export function decideStartLoad(bench: Bench, command: Of<'start load'>, context
   const found = stepOf(open.value, command.step);
   if (!found.ok) return found;
   const { step, index } = found.value;
-  if (!runsAsLoad(step)) return refuse({ code: 'step is not a load' });
+  if (!isTimed(step)) return refuse({ code: 'step is not a load' });
   const unfit = checkAtStep(open.value, index, command.connectors) ?? checkSize(step, command.connectors.length);
   if (unfit) return refuse(unfit);
   if (command.station !== '' && step.kind === 'cure' && !bench.wide.ovens[command.station]) {
@@ -133,7 +133,7 @@ function cureEnding(bench: Bench, batch: Batch, load: Load, setPointC: number, a
     const leftS = cure.dueMs === null ? null : -lateS;
     return { data: { verdict: 'early', lateS, ...frozen }, needsReason: { code: 'too early', leftS, dose } };
   }
-  if (cure.overMs !== null && endMs > cure.overMs) {
+  if (cure.overMs !== null && endMs >= cure.overMs) {
     return { data: { verdict: 'over', lateS, ...frozen }, needsReason: { code: 'too late', lateS, dose } };
   }
   return { data: { verdict: 'in time', lateS, ...frozen }, needsReason: null };

@@ -1,7 +1,8 @@
-import { judges, limitedByMix, runsAsLoad } from '../batch/step-kinds.ts';
+import { judges, limitedByMix } from '../batch/step-kinds.ts';
 import type { Batch, Bench, Mix } from '../batch/types.ts';
 import { workingLifeSeconds } from '../cure/working-life.ts';
 import { benchWide, type Draft } from '../event/entry.ts';
+import { isTimed } from '../recipe/read.ts';
 import { elapsedMs, type Moment } from '../unit/moment.ts';
 import { ok } from '../unit/result.ts';
 import type { Command } from './commands.ts';
@@ -29,16 +30,16 @@ export function decideFinishStep(bench: Bench, command: Of<'finish step'>, conte
   const found = stepOf(open.value, command.step);
   if (!found.ok) return found;
   const { step, index } = found.value;
-  if (runsAsLoad(step)) return refuse({ code: 'step needs a load' });
+  if (isTimed(step)) return refuse({ code: 'step needs a load' });
   if (judges(step)) return refuse({ code: 'step needs a judgement' });
   if (step.kind === 'mix') return refuse({ code: 'step needs a mix' });
   const unfit = checkAtStep(open.value, index, command.connectors) ?? checkSize(step, command.connectors.length);
   if (unfit) return refuse(unfit);
   const when = whenHappened(context.now, command.late);
   if (!when.ok) return when;
-  const lateS = limitedByMix(open.value.recipe, index)
-    ? workingLifeOverS(bench, open.value, command.connectors, when.value.at)
-    : 0;
+  const limited = limitedByMix(open.value.recipe, index);
+  if (limited && bench.wide.unknownGap) return refuse({ code: 'time unknown' });
+  const lateS = limited ? workingLifeOverS(bench, open.value, command.connectors, when.value.at) : 0;
   const reason = command.overrunReason?.trim() ?? '';
   if (lateS > 0 && reason === '') return refuse({ code: 'working life over', lateS });
   const draft: Draft = {

@@ -1,6 +1,7 @@
 import { judges } from '../batch/step-kinds.ts';
 import type { Batch, Bench, Connector } from '../batch/types.ts';
 import type { Draft } from '../event/entry.ts';
+import { crackDefect, firstCure, reterminates } from '../recipe/read.ts';
 import { ok } from '../unit/result.ts';
 import type { Command } from './commands.ts';
 import {
@@ -45,15 +46,9 @@ export function decidePass(bench: Bench, command: Of<'pass'>, context: Context):
   return ok([draft]);
 }
 
-/** The defect that no polishing takes out: NASA-STD-8739.5A forbids repolishing a cracked end face. */
-const crack = 'crack';
-
 /** Whether going back to this step means cutting off: it lies before the cure, and the connector was cured. */
-export function beginsAnew(batch: Batch, connector: Connector, to: number): boolean {
-  const cure = batch.recipe.steps.findIndex((step) => step.kind === 'cure');
-  if (cure < 0 || to > cure) return false;
-  const { stands } = connector;
-  return stands.at === 'step' && stands.step > cure ? true : stands.at === 'load' && stands.step > cure;
+function beginsAnew(batch: Batch, { stands }: Connector, to: number): boolean {
+  return 'step' in stands && reterminates(batch.recipe, stands.step, to);
 }
 
 export function decideSendBack(bench: Bench, command: Of<'send back'>, context: Context): Decision {
@@ -94,10 +89,11 @@ export function decideSendBack(bench: Bench, command: Of<'send back'>, context: 
   );
 }
 
+/** A crack is not polished out (NASA-STD-8739.5A), and nothing is polished more often than the recipe allows. */
 function checkAgain(batch: Batch, again: readonly Connector[], defect: string, to: number): Refusal | null {
-  const cure = batch.recipe.steps.findIndex((step) => step.kind === 'cure');
+  const cure = firstCure(batch.recipe) ?? -1;
   const polishes = again.filter(({ stands }) => 'step' in stands && stands.step > cure && to > cure);
-  if (defect === crack && polishes.length > 0) return { code: 'crack is not polished out' };
+  if (defect === crackDefect && polishes.length > 0) return { code: 'crack is not polished out' };
   const most = batch.recipe.repolishLimit;
   const worn = polishes.filter((connector) => connector.reworks >= most);
   return worn.length > 0 ? { code: 'repolish limit', numbers: numbersOf(worn), most } : null;

@@ -32,6 +32,7 @@ export type Refusal =
   | { readonly code: 'one at a time' }
   | { readonly code: 'no such load' }
   | { readonly code: 'load ended' }
+  | { readonly code: 'time unknown' }
   | { readonly code: 'mix unknown' }
   | { readonly code: 'mix is of another adhesive'; readonly mixed: string; readonly wanted: string }
   | { readonly code: 'mix is over'; readonly sinceS: number }

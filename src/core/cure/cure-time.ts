@@ -49,9 +49,8 @@ export function cureCurve(law: CureLaw): (temperatureC: number) => number {
   };
 }
 
-/** Between two pairs, or past either on the same line: ln t against 1/T. */
+/** Between two pairs, or past either on the same line: ln t against 1/T. At the cooler pair the share is exactly 0. */
 function between(cooler: CurePair, hotter: CurePair, temperatureC: number): number {
-  if (temperatureC === cooler.temperatureC) return cooler.minutes;
   const cold = perKelvin(cooler.temperatureC);
   const share = (cold - perKelvin(temperatureC)) / (cold - perKelvin(hotter.temperatureC));
   return cooler.minutes * Math.exp(share * Math.log(hotter.minutes / cooler.minutes));

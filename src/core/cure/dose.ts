@@ -2,6 +2,8 @@ import { segmentTemperatureC, type Course } from './course.ts';
 import type { DoseLaw } from './dose-law.ts';
 import { panels, type Panel } from './panels.ts';
 
+const solvedWithinMs = 1e-6;
+
 /**
  * Dose gathered from one time to a later one (ms, both finite): the integral of dt / fullMs(T). At a constant
  * temperature it is one division, so a full time gives exactly 1. On ramps and lags the relative error is under 1e-12
@@ -19,7 +21,7 @@ export function integrate(course: Course, law: DoseLaw, fromMs: number, toMs: nu
 
 /**
  * When (ms) a dose is gathered, counted from `fromMs`; null when the course never gathers it. Exact at a constant
- * temperature, on ramps and lags to within 1e-6 ms, never before it is gathered.
+ * temperature, on ramps and lags to within 1e-6 ms.
  */
 export function solve(course: Course, law: DoseLaw, fromMs: number, dose: number): number | null {
   if (dose <= 0) return fromMs;
@@ -55,10 +57,15 @@ function reachedMs(panel: Panel, law: DoseLaw, startMs: number, dose: number): n
   if (panelDose(panel, law, startMs, panel.toMs) < dose) return null;
   let before = startMs;
   let after = panel.toMs;
-  for (let halving = 0; halving < 60 && after - before > 1e-6; halving += 1) {
-    const middle = (before + after) / 2;
-    if (panelDose(panel, law, startMs, middle) < dose) before = middle;
-    else after = middle;
+  let guess = (before + after) / 2;
+  // Newton's steps, and a halving wherever one would leave the bracket.
+  for (let step = 0; step < 100 && after - before > solvedWithinMs; step += 1) {
+    const missing = dose - panelDose(panel, law, startMs, guess);
+    if (missing > 0) before = guess;
+    else after = guess;
+    const moved = missing * law.fullMs(segmentTemperatureC(panel.segment, guess));
+    if (Math.abs(moved) < solvedWithinMs) return guess + moved;
+    guess = guess + moved > before && guess + moved < after ? guess + moved : (before + after) / 2;
   }
   return after;
 }

@@ -1,6 +1,6 @@
 import { failed, ok, type Result } from '../unit/result.ts';
 import { benchOf } from './bench-time.ts';
-import type { Entry, Envelope, Head, Line } from './entry.ts';
+import type { Head, Line } from './entry.ts';
 import { hashOfNothing, sha256 } from './hash.ts';
 import { envelopeOf, headAfter, parseLine } from './line.ts';
 

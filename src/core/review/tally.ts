@@ -1,5 +1,5 @@
 import type { CycleParts } from './cycle.ts';
-import { quantileOfSorted } from './quantile.ts';
+import { quantileInPlace } from './quantile.ts';
 import { ratioOf, type Ratio } from './ratio.ts';
 
 /** One part of the cycle times of several connectors. Medians of parts need not add up; sums do. */
@@ -118,8 +118,7 @@ function spreadOf(lists: readonly (readonly number[])[]): Spread | null {
     place += list.length;
     for (const value of list) sumMs += value;
   }
-  values.sort();
-  const medianMs = quantileOfSorted(values, 0.5);
-  const ninetiethPercentileMs = quantileOfSorted(values, 0.9);
+  const medianMs = quantileInPlace(values, 0.5);
+  const ninetiethPercentileMs = quantileInPlace(values, 0.9);
   return medianMs === null || ninetiethPercentileMs === null ? null : { medianMs, ninetiethPercentileMs, sumMs };
 }

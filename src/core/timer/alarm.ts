@@ -56,5 +56,5 @@ function isQuiet(clock: Clock, urgency: Urgency): boolean {
 function beginsMs(clock: Clock, urgency: Urgency): number {
   if (urgency === 'over') return spanMs(clock, clock.over);
   if (urgency === 'soon') return soonFromMs(clock);
-  return clock.kind === 'at most' ? Infinity : spanMs(clock, clock.due);
+  return spanMs(clock, clock.due);
 }

@@ -1,4 +1,3 @@
-import { unfinished } from '../batch/connectors.ts';
 import { stepIndexIn } from '../batch/open-batch.ts';
 import type { Batch, BenchWide, Mix } from '../batch/types.ts';
 import type { Recipe } from '../recipe/schema.ts';
@@ -17,7 +16,7 @@ export function workingLives(wide: BenchWide, batch: Batch): readonly RunningLif
   const lives = new Map<string, RunningLife>();
   for (const connector of batch.connectors) {
     const { mix: id, stands } = connector;
-    if (id === null || !unfinished(connector)) continue;
+    if (id === null) continue;
     const known = lives.get(id);
     if (known) {
       lives.set(id, { ...known, connectors: known.connectors + 1 });

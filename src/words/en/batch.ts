@@ -1,5 +1,5 @@
 export const batch = {
-  recipeLine: (name: string, revision: string) => `recipe ${name} rev ${revision}`,
+  recipeLine: (revision: string) => `recipe rev ${revision}`,
   stateWord: {
     'to do': 'to do',
     current: 'now',
@@ -18,13 +18,16 @@ export const batch = {
   otherGroups: 'Also open in this batch',
   groupButton: (label: string, count: number) => `${label} (${count})`,
   main: {
-    all: (count: number, done: string) => (count === 1 ? `1 ${done}, next` : `all ${count} ${done}, next`),
+    all: (count: number, done: string) => (count === 1 ? `1 ${done}, next` : `All ${count} ${done}, next`),
     some: (numbers: string, done: string) => `${numbers} ${done}, next`,
     pass: (numbers: string) => `${numbers} good, next`,
-    passAll: (count: number) => (count === 1 ? '1 good, next' : `all ${count} good, next`),
+    passAll: (count: number) => (count === 1 ? '1 good, next' : `All ${count} good, next`),
     mix: 'Mix adhesive',
     trayIn: (count: number) => `Tray in, ${count}`,
     trayOut: 'Tray out, cool down',
+    trayOutEarly: 'Tray out early',
+    endEarly: 'End the wait early',
+    filmOffEarly: 'Film off early',
     takeOut: 'Take out',
     filmOn: (count: number) => `Film on, ${count}`,
     filmOff: 'Film off',

@@ -14,6 +14,8 @@ export const common = {
   on: 'on',
   off: 'off',
   none: 'none',
+  erase: 'Erase',
+  decimalPoint: 'Decimal point',
   tapOnce: 'tap once',
   demo: 'DEMO',
   nobody: 'nobody signed on',

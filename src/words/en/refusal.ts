@@ -45,6 +45,8 @@ export const refusal: { readonly [Code in RefusalCode]: Sentence<Code> } = {
   'one at a time': () => 'This step goes one by one.',
   'no such load': () => 'This load is not here.',
   'load ended': () => 'This load has ended already.',
+  'time unknown': () =>
+    'First say how long the tablet was off: until then nobody knows whether the adhesive is still good.',
   'mix unknown': () => 'This mix is not here.',
   'mix is of another adhesive': ({ mixed, wanted }) => `The mix is ${mixed}; the recipe wants ${wanted}.`,
   'mix is over': ({ sinceS }) => `This mix has been past its working life for ${span(sinceS * 1000)}. Mix anew.`,

@@ -44,6 +44,12 @@ describe('what counts as passed', () => {
       ms: minute,
     },
     { what: 'a start: the wall clock', fact: started, reading: at(20 * minute, -400_000, 'p2'), ms: 20 * minute },
+    {
+      what: 'a start: the wall clock, whatever the page says of its own',
+      fact: started,
+      reading: at(20 * minute, 5 * minute),
+      ms: 20 * minute,
+    },
     { what: 'a start with the wall clock behind: nothing', fact: started, reading: at(-minute, -400_000, 'p2'), ms: 0 },
     {
       what: 'a stated time: the monotonic clock and what was added',

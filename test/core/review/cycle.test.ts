@@ -60,6 +60,15 @@ describe('cycle time', () => {
     expect(cycleOfFirst(book)).toMatchObject({ totalMs: 13 * minuteMs, cureMs: 10 * minuteMs, acrossClocks: true });
   });
 
+  test('never negative, where a late entry and a clock set forward reach back before the opening', () => {
+    const book = inTheOven([1]);
+    const other = { log: 'log-b', benchMs: 7, wallMs: 4 * minuteMs };
+    book.write(other, { type: 'sentBack', v, data: { connectors: [1], to: 'fill', defect: 'void', attempt: 'same' } });
+    const setForward = { benchMs: 5 * minuteMs, wallMs: 60 * minuteMs };
+    book.write(setForward, { type: 'scrapped', v, data: { connectors: [1], defect: 'crack', ago: 10 * 60 } });
+    expect(cycleOfFirst(book)).toMatchObject({ totalMs: 0, handsOnMs: 0, cureMs: 0, waitingMs: 0 });
+  });
+
   test('a re-terminated connector is the same connector: its times run on, and it is not right first time', () => {
     const book = inTheOven([1]);
     const at = (minute: number) => ({ benchMs: minute * minuteMs, wallMs: minute * minuteMs });

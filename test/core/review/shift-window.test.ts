@@ -74,6 +74,19 @@ describe('shift borders', () => {
     expect(shiftWindow(overlapping, at('2026-03-02T14:15'), utc).name).toBe('Late');
   });
 
+  test('where hours begin together, the one listed first holds until its end', () => {
+    const together = [
+      { name: 'Short', from: '06:00', to: '10:00' },
+      { name: 'Long', from: '06:00', to: '14:00' },
+    ];
+    expect(shown(shiftWindow(together, at('2026-03-02T07:00'), utc), utc)).toBe(
+      'Short 2026-03-02 06:00 to 2026-03-02 10:00',
+    );
+    expect(shown(shiftWindow(together, at('2026-03-02T11:00'), utc), utc)).toBe(
+      'Long 2026-03-02 10:00 to 2026-03-02 14:00',
+    );
+  });
+
   test('a shift that another one interrupts has a window on each side of it', () => {
     const hours = [
       { name: 'Day', from: '06:00', to: '22:00' },
@@ -109,6 +122,13 @@ describe('the two nights on which clocks change', () => {
     const jump = at('2026-03-29T01:00');
     expect(shiftWindow(halves, jump - 1, berlin)).toMatchObject({ name: 'First', toWallMs: jump });
     expect(shiftWindow(halves, jump, berlin)).toMatchObject({ name: 'Second', fromWallMs: jump });
+  });
+
+  test('spring: a shift that lies in the hour that is left out does not happen that day', () => {
+    const within = [{ name: 'Check', from: '02:10', to: '02:40' }];
+    const expected = '- 2026-03-28 02:40 to 2026-03-30 02:10';
+    expect(shown(shiftWindow(within, at('2026-03-28T12:00'), berlin), berlin)).toBe(expected);
+    expect(shown(shiftWindow(within, at('2026-03-29T12:00'), berlin), berlin)).toBe(expected);
   });
 
   test('autumn: a border in the hour that comes twice is in the first of the two, once', () => {

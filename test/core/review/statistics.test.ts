@@ -1,6 +1,6 @@
 import * as fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
-import { quantile, quantileOfSorted } from '../../../src/core/review/quantile.ts';
+import { quantile } from '../../../src/core/review/quantile.ts';
 import { ratioOf } from '../../../src/core/review/ratio.ts';
 import { wilsonInterval } from '../../../src/core/review/wilson.ts';
 
@@ -39,7 +39,20 @@ describe('quantiles', () => {
     const list = [3, 1, 2];
     expect(quantile(list, 0.5)).toBe(2);
     expect(list).toEqual([3, 1, 2]);
-    expect(quantileOfSorted([1, 2, 3, 4], 0.5)).toBe(2.5);
+  });
+
+  test('as reckoned from the sorted values', () => {
+    const alike = fc.array(fc.integer({ min: 0, max: 5 }), { minLength: 1, maxLength: 300 });
+    fc.assert(
+      fc.property(fc.oneof(values, alike), probability, (list, share) => {
+        const sorted = [...list].sort((a, b) => a - b);
+        const position = (sorted.length - 1) * share;
+        const lower = sorted[Math.floor(position)] ?? NaN;
+        const upper = sorted[Math.ceil(position)] ?? NaN;
+        expect(quantile(list, share)).toBeCloseTo(lower + (position - Math.floor(position)) * (upper - lower), 5);
+      }),
+      { numRuns: 300 },
+    );
   });
 });
 
@@ -47,6 +60,13 @@ describe('ratios', () => {
   test('of nothing there is none', () => {
     expect(ratioOf(0, 0)).toBeNull();
     expect(wilsonInterval(0, 0)).toBeNull();
+  });
+
+  test('none of many and all of many reach 0 and 1 exactly', () => {
+    for (let of = 1; of <= 2000; of += 1) {
+      expect(wilsonInterval(0, of)?.low).toBe(0);
+      expect(wilsonInterval(of, of)?.high).toBe(1);
+    }
   });
 
   const counts = fc

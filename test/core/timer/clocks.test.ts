@@ -148,6 +148,34 @@ describe('a load', () => {
     expect(ids(script)).toEqual([]);
   });
 
+  test('of a batch that was ended short has no clock', () => {
+    const script = oven(mixed(new Script().open('b1', 2), 'b1', [1, 2]));
+    curing(script, 'b1', 'l1', [1]).do({ type: 'end batch short', batch: 'b1', defect: 'crack' });
+    expect(ids(script)).toEqual([]);
+    // Even where its load was never ended.
+    const { bench } = script;
+    const running = script.batch('b1').loads.map((load) => ({ ...load, ended: null }));
+    expect(clocks({ ...bench, batches: { b1: { ...script.batch('b1'), loads: running } } })).toEqual([]);
+  });
+
+  test('is marked uncertain where another tablet read its oven', () => {
+    const script = oven(mixed(new Script().open('b1', 1), 'b1', [1]));
+    curing(script, 'b1', 'l1', [1]).wait(60);
+    expect(clocks(script.bench)[0]?.uncertain).toBe(false);
+    const other = new Script({ log: 'log-b', wall: script.wall });
+    oven(other).do({ type: 'read oven', oven: 'oven-1', temperatureC: 95 });
+    const { wide } = script.bench;
+    const read = other.bench.wide.ovens['oven-1']?.history.filter(({ kind }) => kind === 'read') ?? [];
+    const mine = wide.ovens['oven-1'];
+    if (!mine) throw new Error('no oven');
+    const both = { ...mine, history: [...mine.history, ...read] };
+    const bench = { ...script.bench, wide: { ...wide, ovens: { 'oven-1': both } } };
+    expect(clocks(bench)[0]).toMatchObject({
+      uncertain: true,
+      about: { why: { kind: 'oven read', temperatureC: 95 } },
+    });
+  });
+
   test('has been seen when somebody said so', () => {
     const script = oven(mixed(new Script().open('b1', 1), 'b1', [1]));
     curing(script, 'b1', 'l1', [1]).wait(1210);

@@ -84,7 +84,7 @@ export function browserTests({ test }: Runner): void {
     const store = steadyStore((gone) => openIndexedDbStore('wiped', gone), { gone: (why) => went.push(why) });
     await store.append(null, first.lines, first.head, []);
     await deleteDB('wiped');
-    equal(went, ['newer version']);
+    equal(went, ['removed']);
     equal(await store.append(first.head, second.lines, second.head, []), 'moved');
     equal(await store.count(), 0);
     store.close();
