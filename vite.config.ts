@@ -7,6 +7,8 @@ const slow = Boolean(process.env.LINTFREE_ENDURANCE);
 export default defineConfig({
   plugins: [sveltekit()],
   build: { assetsInlineLimit: 0 },
+  // The dev server reads no folder of its own accord beyond the framework's.
+  server: { fs: { allow: ['recipes'] } },
   resolve: process.env.VITEST ? { conditions: ['browser'] } : {},
   test: {
     include: [slow ? 'test/endurance/**/*.test.ts' : 'test/**/*.test.ts'],

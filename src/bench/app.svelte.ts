@@ -1,27 +1,23 @@
 import { getContext, setContext } from 'svelte';
-import { readTakenRecipe } from '../core/recipe/parse.ts';
 import type { Moment } from '../core/unit/moment.ts';
-import { benchWide } from '../core/event/entry.ts';
-import { createClock } from '../device/clock.ts';
-import { watchClock } from '../device/clock-watch.ts';
 import { randomId } from '../device/random-id.ts';
-import { startTick } from '../device/tick.ts';
 import { StoreError, type StoreFault } from '../log/errors.ts';
-import { openIndexedDbStore } from '../log/indexed-db-store.ts';
-import { steadyStore } from '../log/steady-store.ts';
+import { takeWriter, type Writer, type WriterState } from '../log/writer.ts';
 import { languages, type Words } from '../words/index.ts';
-import { BenchLog } from './bench-log.ts';
-import { BenchState } from './bench-state.svelte.ts';
+import { AwayNotice } from './away-notice.svelte.ts';
+import type { BenchState } from './bench-state.svelte.ts';
 import { showTimeAt, type ShowTime } from './clock-words.ts';
 import { readMode, writeMode, type Mode } from './mode.ts';
+import { runBench, type RunningBench } from './running-bench.ts';
 import { Tablet } from './tablet.svelte.ts';
 
 export type Fault = StoreFault | { readonly kind: 'unknown'; readonly why: string };
 
-/** How far the start has come. */
+/** How far the start has come. One window has the bench at a time. */
 export type Phase =
   | { readonly at: 'starting' }
   | { readonly at: 'running'; readonly bench: BenchState }
+  | { readonly at: 'other window' }
   | { readonly at: 'not started'; readonly fault: Fault };
 
 /** Everything that a page needs, made once a page life. */
@@ -30,39 +26,30 @@ export class App {
   readonly tablet: Tablet;
   readonly mode: Mode = readMode(localStorage);
   readonly randomId = randomId;
+  readonly away = new AwayNotice();
   /** Minutes east of UTC, now; a zone change shows with the next second. */
   offsetMinutes = $state(0);
   phase = $state.raw<Phase>({ at: 'starting' });
+  #writer: Writer | null = null;
+  #running: RunningBench | null = null;
 
   constructor(readonly version: string) {
     this.tablet = new Tablet(version);
   }
 
   async start(): Promise<void> {
-    try {
-      const clock = createClock();
-      this.offsetMinutes = clock.stamp().offset;
-      const store = await steadyStore((gone) => openIndexedDbStore(this.mode.database, gone));
-      const log = await BenchLog.start({ store, clock, readRecipe: readTakenRecipe, randomId, app: this.version });
-      const bench = new BenchState(log);
-      const tick = startTick();
-      watchClock({
-        clock,
-        tick,
-        onJump: ({ kind }) => void bench.note([{ batch: benchWide, type: kind, v: 1, data: {} }]),
-        onSecond: () => {
-          this.offsetMinutes = clock.stamp().offset;
-          this.#second(bench);
-        },
-      });
-      this.phase = { at: 'running', bench };
-    } catch (error) {
-      const fault: Fault =
-        error instanceof StoreError
-          ? error.fault
-          : { kind: 'unknown', why: error instanceof Error ? error.message : String(error) };
-      this.phase = { at: 'not started', fault };
-    }
+    const { database } = this.mode;
+    this.#writer = await takeWriter(database, {
+      locks: navigator.locks,
+      channel: new BroadcastChannel(`${database} windows`),
+      changed: (state) => void this.#writerChanged(state),
+      letGo: () => this.#running?.stop(),
+    });
+  }
+
+  /** Takes the bench over from the other window. */
+  useHere(): void {
+    this.#writer?.useHere();
   }
 
   /** Shows moments as times of day, reckoned from `now`. */
@@ -76,7 +63,24 @@ export class App {
     window.location.reload();
   }
 
-  #second(bench: BenchState): void {
+  async #writerChanged(state: WriterState): Promise<void> {
+    if (state !== 'writing') {
+      this.#running = null;
+      this.phase = { at: 'other window' };
+      return;
+    }
+    try {
+      const { mode, version } = this;
+      this.#running = await runBench({ mode, version, onSecond: (bench, offset) => this.#second(bench, offset) });
+      this.phase = { at: 'running', bench: this.#running.bench };
+      this.away.started(this.#running.bench.openBatches.length > 0);
+    } catch (error) {
+      this.phase = { at: 'not started', fault: faultOf(error) };
+    }
+  }
+
+  #second(bench: BenchState, offsetMinutes: number): void {
+    this.offsetMinutes = offsetMinutes;
     const fresh = bench.tick();
     const [worst] = bench.calling;
     this.tablet.alarmSound.sound(worst ? { urgency: worst.urgency, heldForMs: worst.lateMs } : null);
@@ -84,7 +88,13 @@ export class App {
     if (first) this.tablet.vibration.vibrate(first.urgency);
     if (bench.clocks.length > 0) this.tablet.wakeLock.hold();
     else this.tablet.wakeLock.letGo();
+    if (bench.wrote) void this.tablet.protectOnce();
   }
+}
+
+function faultOf(error: unknown): Fault {
+  if (error instanceof StoreError) return error.fault;
+  return { kind: 'unknown', why: error instanceof Error ? error.message : String(error) };
 }
 
 const key = Symbol('app');

@@ -173,6 +173,11 @@ export class BenchLog {
     });
   }
 
+  /** Resolves when nothing is being written or read any more. */
+  async idle(): Promise<void> {
+    await this.#queue;
+  }
+
   close(): void {
     this.#listeners.clear();
     this.#options.store.close();

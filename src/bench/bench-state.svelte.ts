@@ -31,8 +31,14 @@ export class BenchState {
 
   readonly #soFar: ShiftSoFar;
 
-  constructor(log: BenchLog) {
+  /** Whether this page life has written any work. */
+  wrote = false;
+  readonly #beforeAsking: () => void;
+
+  /** `beforeAsking` puts on record what the clocks did, before an entry rests on them. */
+  constructor(log: BenchLog, beforeAsking: () => void = () => {}) {
     this.#log = log;
+    this.#beforeAsking = beforeAsking;
     this.#look();
     log.subscribe(() => this.#look());
     this.#soFar = new ShiftSoFar(this);
@@ -57,8 +63,10 @@ export class BenchState {
   }
 
   async ask(command: Command): Promise<Answer> {
+    this.#beforeAsking();
     this.saving = { state: 'saving' };
     const answer = await this.#log.ask(command);
+    this.wrote ||= answer.ok;
     this.#settle(answer);
     return answer;
   }

@@ -15,6 +15,7 @@ export class Tablet {
   readonly appUpdate: AppUpdate;
   readonly #display = createDisplay();
   readonly #stops: (() => void)[] = [];
+  #askedToProtect = false;
 
   awake = $state<WakeLockState>('released');
   sound = $state<SoundState>('needs a tap');
@@ -30,6 +31,13 @@ export class Tablet {
     this.#follow(this.#display, (state) => (this.display = state));
     this.#follow(this.appUpdate, (state) => (this.update = state));
     void this.storageProtection.look();
+  }
+
+  /** Asks the browser once a page life not to clear the log when the disk runs full; it answers by how the app is used. */
+  async protectOnce(): Promise<void> {
+    if (this.#askedToProtect || this.storage.protection === 'protected') return;
+    this.#askedToProtect = true;
+    await this.storageProtection.ask();
   }
 
   release(): void {

@@ -218,9 +218,12 @@ test('a closed store opens nothing anew', async () => {
   expect(bench.opened.map(({ closed }) => closed)).toEqual([true]);
 });
 
-test('two uses that find the same connection dead open one new one', async () => {
-  const fault: Fault = { what: 'lost', name: 'InvalidStateError' };
-  const bench = steady([fault, fault]);
-  expect(await Promise.all([bench.store.count(), bench.store.count()])).toEqual([0, 0]);
+test('a use that fails late does not throw away the connection that was opened since', async () => {
+  const bench = steady([{ what: 'lost', name: 'InvalidStateError' }, { what: 'lost, silent' }]);
+  const outcomes = [outcomeOf(bench.store.count()), outcomeOf(bench.store.count())];
+  await settled();
+  expect(outcomes).toEqual([{ value: 0 }, {}]);
+  await bench.clock.pass(patienceMs.read);
+  expect(outcomes).toEqual([{ value: 0 }, { value: 0 }]);
   expect(bench.opened.map(({ closed }) => closed)).toEqual([true, false]);
 });

@@ -123,7 +123,7 @@ function connectorsOf(batch: OpenBatch, entry: Entry): readonly number[] {
   if (entry.type === 'loadEnded') {
     return batch.loads.find((load) => load.id === entry.data.load)?.connectors ?? [];
   }
-  return 'connectors' in entry.data && entry.type !== 'batchOpened' ? (entry.data.connectors as number[]) : [];
+  return 'connectors' in entry.data && entry.type !== 'batchOpened' ? (entry.data.connectors) : [];
 }
 
 function stepOfEntry(batch: OpenBatch, entry: Entry): number | null {

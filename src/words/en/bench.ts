@@ -84,7 +84,10 @@ export const bench = {
     unit: 'min',
     confirm: 'That long',
   },
-  away: (where: string, time: string, by: string) =>
-    `You were at: ${where}; last entry ${time}${by === '' ? '' : `, ${by}`}`,
-  awayGoOn: 'Go on',
+  away: {
+    title: 'Where you were',
+    line: (where: string, time: string, by: string) => `${where}; last entry ${time}${by === '' ? '' : `, ${by}`}`,
+    goOn: 'Go on',
+  },
+  updateReady: 'A new version is ready. Take it in Settings when no clock is due.',
 };

@@ -1,0 +1,100 @@
+import { jacketColours } from '../core/recipe/colours.ts';
+import type { Recipe } from '../core/recipe/schema.ts';
+import { decimals } from '../words/format.ts';
+import type { Words } from '../words/index.ts';
+import { fieldBasis } from './recipe-basis.ts';
+import { rangeWords } from './step-words.ts';
+
+/** One line of a recipe's part: what, how much, and what it rests on where that differs from its part. */
+export interface RecipeFact {
+  readonly name: string;
+  readonly value: string;
+  readonly basis: string | null;
+}
+
+export function fitsFacts(recipe: Recipe, words: Words): RecipeFact[] {
+  const say = words.recipes.fits;
+  const { fits } = recipe;
+  const fact = factsOf(recipe, '/fits', words);
+  const number = (value: number) => decimals(value, 2);
+  const facts = [
+    fact(say.ferrule, say.ferruleText(number(fits.ferruleMm), fits.ferruleMaterial), 'ferruleMm'),
+    fact(say.bore, say.boreText(rangeWords(fits.boreMinUm, fits.boreMaxUm)), 'boreMinUm'),
+    fact(
+      say.fibre,
+      say.fibreText(
+        words.common.fibreKind(fits.fibreKind),
+        fits.coresUm.map(number).join(say.or),
+        number(fits.claddingUm),
+      ),
+      'coresUm',
+    ),
+    fact(say.coating, say.coatingText(number(fits.coatingUm), number(fits.bufferUm)), 'bufferUm'),
+    fact(
+      say.cable,
+      say.cableText(fits.cableJacketsMm.map(number).join(say.or), jacketColours[fits.jacketColour].name),
+      'cableJacketsMm',
+    ),
+    fact(say.polish, words.common.polish(fits.polish, fits.angleDeg), 'angleDeg'),
+  ];
+  if (fits.terminus) {
+    facts.push(fact(say.terminus, say.terminusText(fits.terminus.name, fits.terminus.channels), 'terminus'));
+  }
+  return facts;
+}
+
+export function stripFacts(recipe: Recipe, words: Words): RecipeFact[] {
+  const say = words.recipes.strip;
+  const fact = factsOf(recipe, '/strip', words);
+  return (['jacketOff', 'strengthMember', 'bareGlass'] as const).map((field) => {
+    const { nominalMm, toleranceMm } = recipe.strip[`${field}Mm`];
+    return fact(say[field], say.length(decimals(nominalMm, 2), decimals(toleranceMm, 2)), `${field}Mm`);
+  });
+}
+
+export function adhesiveFacts(recipe: Recipe, words: Words): RecipeFact[] {
+  const say = words.recipes.adhesive;
+  const { adhesive } = recipe;
+  const fact = factsOf(recipe, '/adhesive', words);
+  const number = (value: number) => decimals(value, 1);
+  const law = adhesive.workingLifeActivationKJPerMol;
+  return [
+    fact(say.name, adhesive.name, 'name'),
+    fact(
+      say.life,
+      [
+        say.lifeText(number(adhesive.workingLifeMinutes), number(adhesive.workingLifeAtC)),
+        law === null ? say.lifeFixed : say.lifeLaw(number(law)),
+      ].join(', '),
+      'workingLifeMinutes',
+    ),
+    fact(say.range, say.rangeText(number(adhesive.lowestC), number(adhesive.highestC)), 'lowestC'),
+    fact(say.longest, say.longestText(number(adhesive.longestDose)), 'longestDose'),
+    fact(say.handling, say.celsius(number(adhesive.handlingC)), 'handlingC'),
+  ];
+}
+
+export function limitFacts(recipe: Recipe, words: Words): RecipeFact[] {
+  const say = words.recipes.limits;
+  const { cableMm, parts } = recipe.retermination;
+  return [
+    {
+      name: say.reterminate,
+      value: say.reterminateText(decimals(cableMm, 0), parts.join(', ')),
+      basis: fieldBasis(recipe, '', '/retermination', words),
+    },
+    {
+      name: say.repolish,
+      value: say.repolishText(recipe.repolishLimit),
+      basis: fieldBasis(recipe, '', '/repolishLimit', words),
+    },
+  ];
+}
+
+const factsOf =
+  (recipe: Recipe, part: string, words: Words) =>
+  (name: string, value: string, field: string): RecipeFact => ({
+    name,
+    value,
+    basis: fieldBasis(recipe, part, `${part}/${field}`, words),
+  });

@@ -1,0 +1,51 @@
+import { benchWide } from '../core/event/entry.ts';
+import { readTakenRecipe } from '../core/recipe/parse.ts';
+import { createClock } from '../device/clock.ts';
+import { watchClock } from '../device/clock-watch.ts';
+import { randomId } from '../device/random-id.ts';
+import { startTick } from '../device/tick.ts';
+import { openIndexedDbStore } from '../log/indexed-db-store.ts';
+import { steadyStore } from '../log/steady-store.ts';
+import { BenchLog } from './bench-log.ts';
+import { BenchState } from './bench-state.svelte.ts';
+import type { Mode } from './mode.ts';
+
+export interface RunningBench {
+  readonly bench: BenchState;
+  /** Finishes what is being written and lets go of the log. */
+  stop(): Promise<void>;
+}
+
+export interface RunOptions {
+  readonly mode: Mode;
+  /** Name and version of the program, for the first entry of the page. */
+  readonly version: string;
+  /** Called about once a second, with minutes east of UTC. */
+  readonly onSecond: (bench: BenchState, offsetMinutes: number) => void;
+}
+
+/** Opens the log, reads what is open, and keeps the time: everything that runs while this window has the bench. */
+export async function runBench({ mode, version, onSecond }: RunOptions): Promise<RunningBench> {
+  const clock = createClock();
+  const store = steadyStore((gone) => openIndexedDbStore(mode.database, gone));
+  const log = await BenchLog.start({ store, clock, readRecipe: readTakenRecipe, randomId, app: version });
+  // A jump of the clocks is on record before the entry that was about to be made.
+  const bench = new BenchState(log, () => void watch.look());
+  const tick = startTick();
+  const watch = watchClock({
+    clock,
+    tick,
+    onJump: ({ kind }) => void bench.note([{ batch: benchWide, type: kind, v: 1, data: {} }]),
+    onSecond: () => onSecond(bench, clock.stamp().offset),
+  });
+  onSecond(bench, clock.stamp().offset);
+  return {
+    bench,
+    async stop() {
+      watch.release();
+      tick.release();
+      await log.idle();
+      log.close();
+    },
+  };
+}
