@@ -13,4 +13,18 @@ import { settings } from './en/settings.ts';
 import { shift } from './en/shift.ts';
 
 /** Every word of the interface, in English. Recipe texts carry their languages in the recipe. */
-export const en = { recipes, common, bench, batch, newBatch, number, picture, alarm, cautions, refusal, ovens, settings, shift };
+export const en = {
+  recipes,
+  common,
+  bench,
+  batch,
+  newBatch,
+  number,
+  picture,
+  alarm,
+  cautions,
+  refusal,
+  ovens,
+  settings,
+  shift,
+};

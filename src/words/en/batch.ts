@@ -105,7 +105,8 @@ export const batch = {
     resume: 'End the hold',
     endShort: 'End the batch short: scrap what is left',
     secondMix: 'The mix will not last',
-    changeWho: 'Other connectors',
+    otherFindings: 'Another finding',
+    changeFinding: 'It is something else',
   },
   late: {
     title: 'Done earlier',

@@ -56,15 +56,12 @@ export const bench = {
   action: {
     trayIn: 'Tray in',
     trayOut: 'Tray out',
-    mix: 'Mix',
+    enterReading: 'Enter reading',
     startFilm: 'Film on',
     endFilm: 'Film off',
     startWait: 'Start it',
     goOn: 'Go on',
-    inspect: 'Inspect',
-    measure: 'Measure',
     closeBatch: 'Close batch',
-    done: (label: string) => `${label} done`,
   },
   empty: {
     title: 'Nothing on the bench',

@@ -64,8 +64,8 @@ export const recipes = {
     given: 'given',
     computedFrom: (minutes: string, c: string, kilojoules: string) =>
       `Computed from ${minutes} min at ${c} °C and ${kilojoules} kJ/mol. Replace with the maker’s own pairs.`,
-    range: 'Counts from, and never above',
-    rangeText: (low: string, high: string) => `${low} °C, ${high} °C`,
+    lowest: 'Counts from',
+    highest: 'Never above',
     longest: 'Longest dose',
     longestText: (dose: string) => `${dose} full cures`,
     handling: 'Handle below',
