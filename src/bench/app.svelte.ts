@@ -11,7 +11,7 @@ import { readMode, writeMode, type Mode } from './mode.ts';
 import { runBench, type RunningBench } from './running-bench.ts';
 import { Tablet } from './tablet.svelte.ts';
 
-export type Fault = StoreFault | { readonly kind: 'unknown'; readonly why: string };
+export type Fault = StoreFault | { readonly kind: 'removed' } | { readonly kind: 'unknown'; readonly why: string };
 
 /** How far the start has come. One window has the bench at a time. */
 export type Phase =
@@ -71,7 +71,14 @@ export class App {
     }
     try {
       const { mode, version } = this;
-      this.#running = await runBench({ mode, version, onSecond: (bench, offset) => this.#second(bench, offset) });
+      this.#running = await runBench({
+        mode,
+        version,
+        onSecond: (bench, offset) => this.#second(bench, offset),
+        onGone: (why) => {
+          this.phase = { at: 'not started', fault: { kind: why === 'removed' ? 'removed' : 'newer' } };
+        },
+      });
       this.phase = { at: 'running', bench: this.#running.bench };
       this.away.started(this.#running.bench.openBatches.length > 0);
     } catch (error) {

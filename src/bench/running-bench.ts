@@ -6,6 +6,7 @@ import { randomId } from '../device/random-id.ts';
 import { startTick } from '../device/tick.ts';
 import { openIndexedDbStore } from '../log/indexed-db-store.ts';
 import { steadyStore } from '../log/steady-store.ts';
+import type { Gone } from '../log/store.ts';
 import { BenchLog } from './bench-log.ts';
 import { BenchState } from './bench-state.svelte.ts';
 import type { Mode } from './mode.ts';
@@ -22,12 +23,16 @@ export interface RunOptions {
   readonly version: string;
   /** Called about once a second, with minutes east of UTC. */
   readonly onSecond: (bench: BenchState, offsetMinutes: number) => void;
+  /** The log was closed from outside and cannot be opened again by itself. */
+  readonly onGone: (why: Exclude<Gone, 'terminated'>) => void;
 }
 
 /** Opens the log, reads what is open, and keeps the time: everything that runs while this window has the bench. */
-export async function runBench({ mode, version, onSecond }: RunOptions): Promise<RunningBench> {
+export async function runBench({ mode, version, onSecond, onGone }: RunOptions): Promise<RunningBench> {
   const clock = createClock();
-  const store = steadyStore((gone) => openIndexedDbStore(mode.database, gone));
+  // A connection that the browser merely lost is opened anew at its next use.
+  const gone = (why: Gone) => why !== 'terminated' && onGone(why);
+  const store = steadyStore((closed) => openIndexedDbStore(mode.database, closed), { gone });
   const log = await BenchLog.start({ store, clock, readRecipe: readTakenRecipe, randomId, app: version });
   // A jump of the clocks is on record before the entry that was about to be made.
   const bench = new BenchState(log, () => void watch.look());

@@ -1,5 +1,8 @@
 import * as z from 'zod/mini';
 
+// Compiling checks at run time would break the page's content security policy.
+z.config({ jitless: true });
+
 /**
  * What an entry can say: type, version and data. Stored text is the record; these schemas only read it.
  * A changed shape gets a new version beside the old one, never a changed old one.

@@ -1,5 +1,8 @@
 import * as z from 'zod/mini';
 
+// Compiling checks at run time would break the page's content security policy.
+z.config({ jitless: true });
+
 /**
  * The shape of a recipe file. Shape only, without transforms or refinements: what a recipe must mean is checked by
  * the rules beside this file. Every number carries its unit in its field's name.

@@ -29,6 +29,8 @@ export const common = {
     blocked: 'Another window of Lintfree keeps the log. Close it, then load this page again.',
     full: 'The tablet has no room left. Nothing was lost. Make room, then load this page again.',
     silent: 'The log does not answer. Close other windows of Lintfree, then load this page again.',
+    removed:
+      'The log was removed from this tablet by something else, such as clearing the browser’s data. Load this page again; bring the entries back from the last copy.',
     broken: 'The log cannot be opened. Load this page again; if that does not help, start the tablet again.',
     unknown: (why: string) => `Something else is wrong: ${why}`,
     again: 'Load again',
