@@ -1,5 +1,5 @@
 import type { ReadRecipe } from '../core/batch/apply-wide.ts';
-import { foldBatch, foldWide, noteEntries } from '../core/batch/fold.ts';
+import { foldBatch } from '../core/batch/fold.ts';
 import type { Batch, Bench, Misfit } from '../core/batch/types.ts';
 import type { Command } from '../core/command/commands.ts';
 import { decide } from '../core/command/decide.ts';
@@ -7,13 +7,18 @@ import type { Refusal } from '../core/command/refusal.ts';
 import { benchNow } from '../core/event/bench-time.ts';
 import { benchWide, type Draft, type Entry, type Head, type Line } from '../core/event/entry.ts';
 import { makeLines } from '../core/event/line.ts';
-import { readSummaryRow } from '../core/review/read-summary-row.ts';
-import { summaryKeysFrom, summaryRow, type SummaryRow } from '../core/review/summary-row.ts';
+import type { SummaryRow } from '../core/review/summary-row.ts';
 import type { Moment } from '../core/unit/moment.ts';
 import { failed, ok, type Result } from '../core/unit/result.ts';
 import type { LogStore } from '../log/store.ts';
+import { batchesWithMix, batchToFetch, mixesInQuestion, needsBenchWide } from './at-hand.ts';
 import { derivedRows, rowKeys } from './derived-rows.ts';
-import { loadBench, readLines, type Loaded, type Unreadable } from './load-bench.ts';
+import { Doubts, type Doubt } from './doubts.ts';
+import { extendBench, wholeWide } from './extend-bench.ts';
+import { loadBench, type Loaded } from './load-bench.ts';
+import { readLines, type Unreadable } from './read-lines.ts';
+import { registerRow, registerText } from './register-row.ts';
+import { readSummaryRows } from './summary-rows.ts';
 
 /** What the log needs to know of the tablet at the instant of writing. Times in ms, `offset` in minutes. */
 export interface TabletClock {
@@ -40,23 +45,31 @@ export type Answer = Result<readonly Entry[], Refusal | NotSaved>;
 
 /** How often a command is decided again because another window wrote in between. */
 const mostTries = 3;
+/** Stands for what the tablet itself noticed, among commands. */
+const noticed = '';
 
 /**
  * The bench as this tablet knows it, and the one way to add to its log. Commands are taken one after the other; what
  * is shown changes only once it is saved.
  */
 export class BenchLog {
-  #options: BenchLogOptions;
+  readonly #options: BenchLogOptions;
   #loaded: Loaded;
   #queue: Promise<unknown> = Promise.resolve();
-  #listeners = new Set<() => void>();
+  readonly #listeners = new Set<() => void>();
+  /** What must be on record before anything else, since bench time rests on it. */
+  #owed: readonly Draft[] = [];
+  readonly #doubts = new Doubts();
 
   private constructor(options: BenchLogOptions, loaded: Loaded) {
     this.#options = options;
     this.#loaded = loaded;
   }
 
-  /** Reads what is open and writes the first entry of this page. */
+  /**
+   * Reads what is open and writes the first entry of this page. Where that entry cannot be saved the bench can still be
+   * read, and it is written before the next one; `write([])` tells.
+   */
   static async start(options: BenchLogOptions): Promise<BenchLog> {
     const loaded = await loadBench(options.store, options.readRecipe, options.randomId);
     const log = new BenchLog(options, loaded);
@@ -94,59 +107,49 @@ export class BenchLog {
     return () => this.#listeners.delete(listener);
   }
 
-  /** Decides, writes and only then shows; a refusal leaves no entry. */
+  /**
+   * Decides, writes and only then shows; a refusal leaves no entry. A command that is asked again because nobody heard
+   * whether it was saved is not doubled.
+   */
   ask(command: Command): Promise<Answer> {
-    return this.#inTurn(async () => {
-      for (let attempt = 1; ; attempt += 1) {
+    const asked = JSON.stringify(command);
+    return this.#inTurn(() =>
+      this.#trying(async () => {
+        const heard = await this.#hear();
+        if (heard?.asked === asked) return ok(heard.entries);
+        const first = await this.#writeOwed();
+        if (first === 'moved' || !first.ok) return first;
+        await this.#bringToHand(command);
         const decision = decide(this.bench, command, { now: this.now, by: this.#by });
-        if (!decision.ok) return decision;
-        const answer = await this.#append(decision.value);
-        if (answer !== 'moved') return answer;
-        if (attempt === mostTries) return notSaved([], 'another window keeps writing');
-        await this.#reload();
-      }
-    });
+        return decision.ok ? this.#append(decision.value, asked) : decision;
+      }),
+    );
   }
 
-  /** Writes entries that nobody decides: what the tablet itself noticed. */
+  /**
+   * Writes entries that nobody decides: what the tablet itself noticed. Where they cannot be saved, they are written
+   * before the next entry.
+   */
   write(drafts: readonly Draft[]): Promise<Answer> {
-    return this.#inTurn(async () => {
-      for (let attempt = 1; ; attempt += 1) {
-        const answer = await this.#append(drafts);
-        if (answer !== 'moved') return answer;
-        if (attempt === mostTries) return notSaved([], 'another window keeps writing');
-        await this.#reload();
-      }
-    });
+    this.#owed = [...this.#owed, ...drafts];
+    return this.#inTurn(() =>
+      this.#trying(async () => {
+        await this.#hear();
+        return this.#writeOwed();
+      }),
+    );
   }
 
   /** Brings a closed batch back into view, to show or to reopen it. */
-  async fetchBatch(id: string): Promise<Batch | null> {
-    return this.#inTurn(async () => {
-      const known = this.bench.batches[id];
-      if (known) return known;
-      const { entries, unreadable } = readLines(await this.#options.store.linesOfBatch(id));
-      const { batch } = foldBatch(entries, this.bench.wide.recipes);
-      if (!batch) return null;
-      const bench = {
-        ...this.bench,
-        batches: { ...this.bench.batches, [id]: batch },
-        entries: { ...this.bench.entries, [id]: entries },
-      };
-      this.#show({ ...this.#loaded, bench, unreadable: [...this.unreadable, ...unreadable] });
-      return batch;
-    });
+  fetchBatch(id: string): Promise<Batch | null> {
+    return this.#inTurn(() => this.#fetchBatch(id));
   }
 
   /** Reads the bench-wide entries of all time, so that one of them can be taken back. */
-  async fetchBenchWide(): Promise<readonly Entry[]> {
+  fetchBenchWide(): Promise<readonly Entry[]> {
     return this.#inTurn(async () => {
-      const { entries } = readLines(await this.#options.store.linesOfBatch(benchWide));
-      this.#show({
-        ...this.#loaded,
-        bench: { ...this.bench, entries: { ...this.bench.entries, [benchWide]: entries } },
-      });
-      return entries;
+      await this.#fetchBenchWide();
+      return this.bench.entries[benchWide] ?? [];
     });
   }
 
@@ -154,23 +157,8 @@ export class BenchLog {
    * What closed batches left behind that can tell of something at `fromWallMs` or later. A row of another version, or
    * a damaged one, is made anew from the lines of its batch.
    */
-  async summaryRows(fromWallMs: number): Promise<readonly SummaryRow[]> {
-    const { store } = this.#options;
-    const { lower, upper } = summaryKeysFrom(fromWallMs);
-    return this.#inTurn(async () => {
-      const rows: SummaryRow[] = [];
-      for (const { key, value } of await store.derivedBetween(lower, upper)) {
-        const read = readSummaryRow(value);
-        if (read.ok) rows.push(read.value);
-        else {
-          const id = key.split(':').slice(2).join(':');
-          const { batch } = foldBatch(readLines(await store.linesOfBatch(id)).entries, this.bench.wide.recipes);
-          const row = batch && summaryRow(batch);
-          if (row) rows.push(row);
-        }
-      }
-      return rows;
-    });
+  summaryRows(fromWallMs: number): Promise<readonly SummaryRow[]> {
+    return this.#inTurn(() => readSummaryRows(this.#options.store, this.bench.wide.recipes, fromWallMs));
   }
 
   /** Resolves when nothing is being written or read any more. */
@@ -193,87 +181,118 @@ export class BenchLog {
     return turn;
   }
 
-  async #append(drafts: readonly Draft[]): Promise<Answer | 'moved'> {
+  /** Tries again on the news of another window. What the store throws becomes an answer, as does an unfit value. */
+  async #trying(attempt: () => Promise<Answer | 'moved'>): Promise<Answer> {
+    try {
+      for (let tries = 1; tries <= mostTries; tries += 1) {
+        const answer = await attempt();
+        if (answer !== 'moved') return answer;
+        await this.#reload();
+      }
+      return this.#notSaved('another window keeps writing');
+    } catch (error) {
+      const why = error instanceof Error ? error.message : String(error);
+      return error instanceof RangeError ? failed({ code: 'does not fit', why }) : this.#notSaved(why);
+    }
+  }
+
+  async #writeOwed(): Promise<Answer | 'moved'> {
+    const owed = this.#owed;
+    if (owed.length === 0) return ok([]);
+    const answer = await this.#append(owed, noticed);
+    if (answer !== 'moved' && answer.ok) this.#owed = this.#owed.slice(owed.length);
+    return answer;
+  }
+
+  /** Whether lines in doubt were saved after all: then their command is done. */
+  async #hear(): Promise<Doubt | null> {
+    const doubt = await this.#doubts.saved(this.#options.store);
+    if (!doubt) return null;
+    await this.#reload();
+    this.#doubts.clear();
+    if (doubt.asked === noticed) this.#owed = this.#owed.slice(doubt.lines.length);
+    return doubt;
+  }
+
+  async #append(drafts: readonly Draft[], asked: string): Promise<Answer | 'moved'> {
     if (drafts.length === 0) return ok([]);
-    const { own, head, heads, seen } = this.#loaded;
+    const { own, head, heads, seen, unreadable } = this.#loaded;
     const stamp = { ...this.#options.clock.stamp(), log: own, by: this.#by, seen };
     const made = makeLines(head, drafts, stamp);
-    const { entries } = readLines(made.lines.map(({ text }) => text));
+    const { entries } = readLines(
+      made.lines.map(({ text }) => text),
+      benchWide,
+    );
     const allHeads = [...heads.filter(({ log }) => log !== own), made.head];
     const bench = extendBench(this.bench, entries, this.#options.readRecipe);
     const now = { log: own, bench: made.head.bench, wall: made.head.wall };
-    const derived = derivedRows(this.bench, bench, drafts, allHeads, now);
+    const register = registerText(registerRow(bench, allHeads, unreadable, now));
+    const derived = [{ key: rowKeys.wide, value: register }, ...derivedRows(this.bench, bench, drafts)];
     if (!head) derived.push({ key: rowKeys.own, value: own });
     try {
       const appended = await this.#options.store.append(head, made.lines, made.head, derived);
       if (appended === 'moved') return 'moved';
     } catch (error) {
-      return notSaved(made.lines, error instanceof Error ? error.message : String(error));
+      this.#doubts.add({ asked, lines: made.lines, entries });
+      throw error;
     }
+    // Another line follows the head now, so none in doubt can arrive any more.
+    this.#doubts.clear();
     this.#show({ ...this.#loaded, bench, head: made.head, heads: allHeads });
     return ok(entries);
   }
 
+  /** Reads what a command rests on and a start leaves aside. */
+  async #bringToHand(command: Command): Promise<void> {
+    const batch = batchToFetch(this.bench, command);
+    if (batch !== null) await this.#fetchBatch(batch);
+    if (needsBenchWide(this.bench, command)) await this.#fetchBenchWide();
+    const { store } = this.#options;
+    for (const mixed of mixesInQuestion(this.bench, command)) {
+      for (const id of await batchesWithMix(store, this.#loaded.heads, mixed)) await this.#fetchBatch(id);
+    }
+  }
+
+  async #fetchBatch(id: string): Promise<Batch | null> {
+    const known = this.bench.batches[id];
+    if (known) return known;
+    const read = readLines(await this.#options.store.linesOfBatch(id), id);
+    if (read.entries.length === 0) return null;
+    // Its mixes and ovens may be older than what open work needs.
+    await this.#fetchBenchWide();
+    const { batch } = foldBatch(read.entries, this.bench.wide.recipes);
+    const batches = batch ? { ...this.bench.batches, [id]: batch } : this.bench.batches;
+    const bench = { ...this.bench, batches, entries: { ...this.bench.entries, [id]: read.entries } };
+    this.#show({ ...this.#loaded, bench, unreadable: this.#alsoUnreadable(id, read.unreadable) });
+    return batch;
+  }
+
+  async #fetchBenchWide(): Promise<void> {
+    if (this.#loaded.whole) return;
+    const { entries, unreadable } = readLines(await this.#options.store.linesOfBatch(benchWide), benchWide);
+    const wide = wholeWide(this.bench.wide, entries, this.#options.readRecipe);
+    const bench = { ...this.bench, wide, entries: { ...this.bench.entries, [benchWide]: entries } };
+    this.#show({ ...this.#loaded, bench, whole: true, unreadable: this.#alsoUnreadable(benchWide, unreadable) });
+  }
+
+  #alsoUnreadable(batch: string, found: readonly Unreadable[]): readonly Unreadable[] {
+    return [...this.unreadable.filter((each) => each.batch !== batch), ...found];
+  }
+
+  /** What was in view stays in view. */
   async #reload(): Promise<void> {
     const { store, readRecipe, randomId } = this.#options;
+    const inView = Object.keys(this.bench.batches);
     this.#show(await loadBench(store, readRecipe, randomId));
+    for (const id of inView) await this.#fetchBatch(id);
+  }
+
+  #notSaved(why: string): Answer {
+    return failed({ code: 'not saved', lines: this.#doubts.lines, why });
   }
 
   #show(loaded: Loaded): void {
     this.#loaded = loaded;
     for (const listener of this.#listeners) listener();
   }
-}
-
-const notSaved = (lines: readonly Line[], why: string) => failed({ code: 'not saved', lines, why } as const);
-
-/** The bench with entries added that are later than all it knows. A void refolds its batch, or all bench-wide state. */
-export function extendBench(bench: Bench, added: readonly Entry[], readRecipe: ReadRecipe): Bench {
-  const entries: Record<string, readonly Entry[]> = { ...bench.entries };
-  for (const entry of added) entries[entry.batch] = [...(entries[entry.batch] ?? []), entry];
-  const wideAdded = added.filter(({ batch }) => batch === benchWide);
-  let wide = noteEntries(bench.wide, added);
-  wide = wideAdded.some(({ type }) => type === 'voided')
-    ? withoutVoided(wide, wideAdded, entries[benchWide] ?? [], readRecipe)
-    : foldWide(wideAdded, readRecipe, wide);
-  const batches: Record<string, Batch> = { ...bench.batches };
-  for (const id of new Set(added.map(({ batch }) => batch))) {
-    if (id === benchWide) continue;
-    const { batch, misfits } = foldBatch(entries[id] ?? [], wide.recipes);
-    if (batch) batches[id] = batch;
-    else delete batches[id];
-    if (!batch && misfits.length > 0) wide = { ...wide, misfits: [...wide.misfits, ...misfits] };
-  }
-  return { wide, batches, entries };
-}
-
-/** Takes mixes and oven entries out of a register whose earlier entries are not all at hand. */
-function withoutVoided(
-  wide: Bench['wide'],
-  added: readonly Entry[],
-  known: readonly Entry[],
-  readRecipe: ReadRecipe,
-): Bench['wide'] {
-  const targets = added.flatMap((entry) => (entry.type === 'voided' ? entry.data.targets : []));
-  const gone = new Set(targets.map(({ log, seq }) => `${log} ${seq}`));
-  const mixes = new Set(
-    known.flatMap((entry) =>
-      gone.has(`${entry.log} ${entry.seq}`) && entry.type === 'adhesiveMixed' ? [entry.data.mix] : [],
-    ),
-  );
-  const kept = {
-    ...wide,
-    mixes: Object.fromEntries(Object.entries(wide.mixes).filter(([id]) => !mixes.has(id))),
-    ovens: Object.fromEntries(
-      Object.entries(wide.ovens).map(([id, oven]) => [
-        id,
-        { ...oven, history: oven.history.filter(({ entry }) => !gone.has(`${entry.log} ${entry.seq}`)) },
-      ]),
-    ),
-  };
-  return foldWide(
-    added.filter(({ type }) => type !== 'voided'),
-    readRecipe,
-    kept,
-  );
 }

@@ -1,126 +1,104 @@
-import type { ReadRecipe } from '../core/batch/apply-wide.ts';
-import { emptyBenchWide } from '../core/batch/apply-wide.ts';
-import { foldBatch, foldBench } from '../core/batch/fold.ts';
-import { foldVersion } from '../core/batch/register.ts';
-import type { Batch, Bench, BenchWide, TakenRecipe } from '../core/batch/types.ts';
-import { type Entry, type Head, type Line } from '../core/event/entry.ts';
-import { parseLine, type LineProblem } from '../core/event/line.ts';
-import { inOrder } from '../core/event/order.ts';
-import type { LogStore } from '../log/store.ts';
-import { batchRows, registerRow, rowKeys, type RegisterRow } from './derived-rows.ts';
+import { emptyBenchWide, type ReadRecipe } from '../core/batch/apply-wide.ts';
+import { foldBatch } from '../core/batch/fold.ts';
+import type { Batch, Bench, TakenRecipe } from '../core/batch/types.ts';
+import { latestTime } from '../core/event/clock.ts';
+import type { Entry, Head } from '../core/event/entry.ts';
+import { sha256 } from '../core/event/hash.ts';
+import type { DerivedRow, LogStore } from '../log/store.ts';
+import { rowKeys } from './derived-rows.ts';
+import { readLines, type Unreadable } from './read-lines.ts';
+import { rebuildBench } from './rebuild-bench.ts';
+import { readRegister, type RegisterRow } from './register-row.ts';
 
-export interface Unreadable {
-  readonly text: string;
-  readonly problem: LineProblem;
+/** The bench as it was read, open work alone. */
+export interface Found {
+  readonly bench: Bench;
+  readonly unreadable: readonly Unreadable[];
+  /** Whether all bench-wide entries are at hand, or only those made since. */
+  readonly whole: boolean;
+  /** The latest time of any entry, where all were read. */
+  readonly latest: string | null;
 }
 
-export interface Loaded {
-  readonly bench: Bench;
+export interface Loaded extends Omit<Found, 'latest'> {
   /** The log that this tablet writes, and where it stands; null before its first line. */
   readonly own: string;
   readonly head: Head | null;
   readonly heads: readonly Head[];
   /** The latest time read of any other log. */
   readonly seen: string | null;
-  readonly unreadable: readonly Unreadable[];
-}
-
-/** Lines as entries in total order; what cannot be read is kept apart and named. */
-export function readLines(texts: readonly string[]): { entries: Entry[]; unreadable: Unreadable[] } {
-  const entries: Entry[] = [];
-  const unreadable: Unreadable[] = [];
-  for (const text of texts) {
-    const read = parseLine(text);
-    if (read.ok) entries.push(read.value);
-    else unreadable.push({ text, problem: read.error });
-  }
-  return { entries: inOrder(entries), unreadable };
 }
 
 /** What a start reads: where the logs stand, the register, and the entries of open batches. Not history. */
 export async function loadBench(store: LogStore, readRecipe: ReadRecipe, randomId: () => string): Promise<Loaded> {
-  const heads = await store.heads();
-  const ownRows = await store.derived(rowKeys.own);
-  const own = ownRows.find(({ key }) => key === rowKeys.own)?.value ?? randomId();
+  const [heads, ownRows, wideRows] = await Promise.all([
+    store.heads(),
+    store.derived(rowKeys.own),
+    store.derived(rowKeys.wide),
+  ]);
+  const register = readRegister(valueOf(wideRows, rowKeys.wide), heads);
+  const open = register && (await loadOpen(store, register, readRecipe));
+  const { latest, ...found } = open ?? (await rebuildBench(store, readRecipe));
+  const own = (await ownLog(store, valueOf(ownRows, rowKeys.own), heads)) ?? randomId();
   const head = heads.find(({ log }) => log === own) ?? null;
-  const others = heads.filter(({ log }) => log !== own).map(({ time }) => time);
-  const seen = others.length === 0 ? null : others.reduce((latest, time) => (time > latest ? time : latest));
-  const register = readRegister((await store.derived(rowKeys.wide))[0]?.value, heads);
-  const { bench, unreadable } = register
-    ? await loadOpen(store, register, readRecipe)
-    : await rebuild(store, heads, readRecipe);
-  return { bench, own, head, heads, seen, unreadable };
+  const others = heads.flatMap(({ log, time }) => (log === own ? [] : [time]));
+  return { ...found, own, head, heads, seen: latestTime(latest === null ? others : [...others, latest]) };
 }
 
-function readRegister(text: string | undefined, heads: readonly Head[]): RegisterRow | null {
-  if (text === undefined) return heads.length === 0 ? emptyRegister : null;
-  try {
-    const row = JSON.parse(text) as RegisterRow;
-    const current = heads.every(({ log, seq }) => row.heads[log] === seq);
-    return row.fold === foldVersion && current && typeof row.wide === 'object' ? row : null;
-  } catch {
-    return null;
-  }
+const valueOf = (rows: readonly DerivedRow[], key: string): string | undefined =>
+  rows.find((row) => row.key === key)?.value;
+
+/** The log that this tablet writes; null where a new one begins, also where the old one lost its head. */
+async function ownLog(store: LogStore, named: string | undefined, heads: readonly Head[]): Promise<string | null> {
+  if (named === undefined || named === '') return null;
+  if (heads.some(({ log }) => log === named)) return named;
+  const [line] = await store.lines({ log: named, seq: 0 }, 1);
+  return line?.log === named ? null : named;
 }
 
-const { recipes: _none, ...emptyWide } = emptyBenchWide;
-const emptyRegister: RegisterRow = { fold: foldVersion, heads: {}, wide: emptyWide };
-
-async function loadOpen(store: LogStore, row: RegisterRow, readRecipe: ReadRecipe) {
-  const wide: BenchWide = { ...emptyBenchWide, ...row.wide, recipes: await loadRecipes(store, readRecipe) };
+/** Null where a row that the register names is missing or damaged, so that all must be read. */
+async function loadOpen(store: LogStore, row: RegisterRow, readRecipe: ReadRecipe): Promise<Found | null> {
+  const [recipes, open, unread] = await Promise.all([
+    loadRecipes(store, row.recipes, readRecipe),
+    Promise.all(row.open.map(async (id) => [id, readLines(await store.linesOfBatch(id), id)] as const)),
+    Promise.all(row.unreadable.map((id) => stillUnreadable(store, id))),
+  ]);
+  // Lines that can be read by now are in no register.
+  if (!recipes || unread.some(({ length }) => length === 0)) return null;
   const batches: Record<string, Batch> = {};
   const entries: Record<string, readonly Entry[]> = {};
-  const unreadable: Unreadable[] = [];
-  for (const { key } of await store.derived('open:')) {
-    const id = key.slice('open:'.length);
-    const read = readLines(await store.linesOfBatch(id));
-    unreadable.push(...read.unreadable);
+  for (const [id, read] of open) {
+    const { batch } = foldBatch(read.entries, recipes);
+    if (!batch || batch.closed) return null;
+    batches[id] = batch;
     entries[id] = read.entries;
-    const { batch } = foldBatch(read.entries, wide.recipes);
-    if (batch) batches[id] = batch;
   }
-  return { bench: { wide, batches, entries }, unreadable };
+  const unreadable = [...open.flatMap(([, read]) => read.unreadable), ...unread.flat()];
+  const wide = { ...emptyBenchWide, ...row.wide, recipes };
+  return { bench: { wide, batches, entries }, unreadable, whole: false, latest: null };
 }
 
-async function loadRecipes(store: LogStore, readRecipe: ReadRecipe): Promise<Record<string, TakenRecipe>> {
+async function stillUnreadable(store: LogStore, batch: string): Promise<Unreadable[]> {
+  const { unreadable } = readLines(await store.linesOfBatch(batch), batch);
+  // A row that lost its batch is found among all lines alone.
+  if (batch === '' && unreadable.length === 0) {
+    return [{ batch, text: '', problem: { kind: 'damaged', why: 'filed under no batch' } }];
+  }
+  return unreadable;
+}
+
+async function loadRecipes(
+  store: LogStore,
+  hashes: readonly string[],
+  readRecipe: ReadRecipe,
+): Promise<Record<string, TakenRecipe> | null> {
+  const rows = new Map((await store.derived(rowKeys.recipes)).map(({ key, value }) => [key, value]));
   const recipes: Record<string, TakenRecipe> = {};
-  for (const { key, value } of await store.derived('recipe:')) {
-    const hash = key.slice('recipe:'.length);
-    const recipe = readRecipe(value);
-    if (recipe) recipes[hash] = { hash, recipe };
+  for (const hash of hashes) {
+    const text = rows.get(rowKeys.recipe(hash));
+    const recipe = text !== undefined && sha256(text) === hash ? readRecipe(text) : null;
+    if (!recipe) return null;
+    recipes[hash] = { hash, recipe };
   }
   return recipes;
-}
-
-/** Makes every derived row anew from the whole log: after an upgrade of the fold, or where rows were lost. */
-async function rebuild(store: LogStore, heads: readonly Head[], readRecipe: ReadRecipe) {
-  const texts: string[] = [];
-  const page = 10_000;
-  let last: Line | undefined;
-  for (;;) {
-    const lines: Line[] = await store.lines(last, page);
-    texts.push(...lines.map(({ text }) => text));
-    last = lines.at(-1);
-    if (lines.length < page) break;
-  }
-  const { entries, unreadable } = readLines(texts);
-  const whole = foldBench(entries, readRecipe);
-  const latest = entries.at(-1);
-  const now = { log: latest?.log ?? '', bench: latest?.bench ?? 0, wall: latest?.wall ?? 0 };
-  const taken = entries.flatMap((entry) => (entry.type === 'recipeTaken' ? [entry.data] : []));
-  await store.putDerived([
-    registerRow(whole, heads, now),
-    ...taken.map(({ hash, text }) => ({ key: rowKeys.recipe(hash), value: text })),
-    ...Object.values(whole.batches).flatMap((batch) => batchRows(undefined, batch, batch.id)),
-  ]);
-  return { bench: onlyOpen(whole), unreadable };
-}
-
-function onlyOpen(bench: Bench): Bench {
-  const open = Object.values(bench.batches).filter((batch) => !batch.closed);
-  return {
-    wide: bench.wide,
-    batches: Object.fromEntries(open.map((batch) => [batch.id, batch])),
-    entries: Object.fromEntries(open.map(({ id }) => [id, bench.entries[id] ?? []])),
-  };
 }

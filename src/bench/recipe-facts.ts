@@ -3,13 +3,14 @@ import type { Recipe } from '../core/recipe/schema.ts';
 import { decimals } from '../words/format.ts';
 import type { Words } from '../words/index.ts';
 import { fieldBasis } from './recipe-basis.ts';
+import { lowerFirst } from './shift-view.ts';
 import { rangeWords } from './step-words.ts';
 
 /** One line of a recipe's part: what, how much, and what it rests on where that differs from its part. */
 export interface RecipeFact {
   readonly name: string;
   readonly value: string;
-  readonly basis: string | null;
+  readonly basis: readonly string[];
 }
 
 export function fitsFacts(recipe: Recipe, words: Words): RecipeFact[] {
@@ -18,8 +19,8 @@ export function fitsFacts(recipe: Recipe, words: Words): RecipeFact[] {
   const fact = factsOf(recipe, '/fits', words);
   const number = (value: number) => decimals(value, 2);
   const facts = [
-    fact(say.ferrule, say.ferruleText(number(fits.ferruleMm), fits.ferruleMaterial), 'ferruleMm'),
-    fact(say.bore, say.boreText(rangeWords(fits.boreMinUm, fits.boreMaxUm)), 'boreMinUm'),
+    fact(say.ferrule, say.ferruleText(number(fits.ferruleMm), fits.ferruleMaterial), 'ferruleMm', 'ferruleMaterial'),
+    fact(say.bore, say.boreText(rangeWords(fits.boreMinUm, fits.boreMaxUm)), 'boreMinUm', 'boreMaxUm'),
     fact(
       say.fibre,
       say.fibreText(
@@ -27,15 +28,18 @@ export function fitsFacts(recipe: Recipe, words: Words): RecipeFact[] {
         fits.coresUm.map(number).join(say.or),
         number(fits.claddingUm),
       ),
+      'fibreKind',
       'coresUm',
+      'claddingUm',
     ),
-    fact(say.coating, say.coatingText(number(fits.coatingUm), number(fits.bufferUm)), 'bufferUm'),
+    fact(say.coating, say.coatingText(number(fits.coatingUm), number(fits.bufferUm)), 'coatingUm', 'bufferUm'),
     fact(
       say.cable,
       say.cableText(fits.cableJacketsMm.map(number).join(say.or), jacketColours[fits.jacketColour].name),
       'cableJacketsMm',
+      'jacketColour',
     ),
-    fact(say.polish, words.common.polish(fits.polish, fits.angleDeg), 'angleDeg'),
+    fact(say.polish, words.common.polish(fits.polish, fits.angleDeg), 'polish', 'angleDeg'),
   ];
   if (fits.terminus) {
     facts.push(fact(say.terminus, say.terminusText(fits.terminus.name, fits.terminus.channels), 'terminus'));
@@ -67,8 +71,11 @@ export function adhesiveFacts(recipe: Recipe, words: Words): RecipeFact[] {
         law === null ? say.lifeFixed : say.lifeLaw(number(law)),
       ].join(', '),
       'workingLifeMinutes',
+      'workingLifeAtC',
+      'workingLifeActivationKJPerMol',
     ),
-    fact(say.range, say.rangeText(number(adhesive.lowestC), number(adhesive.highestC)), 'lowestC'),
+    fact(say.lowest, say.celsius(number(adhesive.lowestC)), 'lowestC'),
+    fact(say.highest, say.celsius(number(adhesive.highestC)), 'highestC'),
     fact(say.longest, say.longestText(number(adhesive.longestDose)), 'longestDose'),
     fact(say.handling, say.celsius(number(adhesive.handlingC)), 'handlingC'),
   ];
@@ -77,24 +84,23 @@ export function adhesiveFacts(recipe: Recipe, words: Words): RecipeFact[] {
 export function limitFacts(recipe: Recipe, words: Words): RecipeFact[] {
   const say = words.recipes.limits;
   const { cableMm, parts } = recipe.retermination;
+  const fact = factsOf(recipe, '', words);
   return [
-    {
-      name: say.reterminate,
-      value: say.reterminateText(decimals(cableMm, 0), parts.join(', ')),
-      basis: fieldBasis(recipe, '', '/retermination', words),
-    },
-    {
-      name: say.repolish,
-      value: say.repolishText(recipe.repolishLimit),
-      basis: fieldBasis(recipe, '', '/repolishLimit', words),
-    },
+    fact(
+      say.reterminate,
+      say.reterminateText(decimals(cableMm, 0), parts.map(lowerFirst).join(', ')),
+      'retermination',
+      'retermination/cableMm',
+      'retermination/parts',
+    ),
+    fact(say.repolish, say.repolishText(recipe.repolishLimit), 'repolishLimit'),
   ];
 }
 
+/** A line can tell of several fields of a part; each basis of its own is told once. */
 const factsOf =
   (recipe: Recipe, part: string, words: Words) =>
-  (name: string, value: string, field: string): RecipeFact => ({
-    name,
-    value,
-    basis: fieldBasis(recipe, part, `${part}/${field}`, words),
-  });
+  (name: string, value: string, ...fields: readonly string[]): RecipeFact => {
+    const bases = fields.flatMap((field) => fieldBasis(recipe, part, `${part}/${field}`, words) ?? []);
+    return { name, value, basis: [...new Set(bases)] };
+  };

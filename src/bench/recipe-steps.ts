@@ -1,6 +1,6 @@
 import { defectText, reterminates, stepIndex } from '../core/recipe/read.ts';
 import type { Caution, Recipe, Step } from '../core/recipe/schema.ts';
-import { span } from '../words/format.ts';
+import { decimals } from '../words/format.ts';
 import type { Words } from '../words/index.ts';
 import { stepBasis } from './recipe-basis.ts';
 import { lowerFirst } from './shift-view.ts';
@@ -43,7 +43,13 @@ function goesWords({ goes, loadSize }: Step, words: Words): string {
 function standardWords({ standard: { setupS, eachS } }: Step, words: Words): string {
   const say = words.recipes.steps;
   if (setupS === 0 && eachS === 0) return say.noStandard;
-  return say.standard(setupS === 0 ? '' : span(setupS * 1000), eachS === 0 ? '' : span(eachS * 1000));
+  return say.standard(setupS === 0 ? '' : standardTime(setupS, words), eachS === 0 ? '' : standardTime(eachS, words));
+}
+
+/** Exact, unlike a span that only tells how long something takes about. */
+function standardTime(seconds: number, words: Words): string {
+  const say = words.recipes.steps;
+  return seconds < 120 ? say.seconds(decimals(seconds, 1)) : say.minutes(decimals(seconds / 60, 2));
 }
 
 function limitWords(recipe: Recipe, step: Step, words: Words): string[] {

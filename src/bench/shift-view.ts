@@ -17,18 +17,26 @@ export interface ShiftContext {
 
 const percent = (share: number): number => Math.round(share * 100);
 
-export function windowWords({ name, fromWallMs, toWallMs }: ShiftWindow, context: ShiftContext): string {
+/** A day that loses an hour in spring is whole all the same. */
+const shortestDayMs = 23 * 3_600_000;
+
+/** What a window is called: its shift, or what it is where it has none. */
+export function windowName({ name, fromWallMs, toWallMs }: ShiftWindow, words: Words): string {
+  return name ?? (toWallMs - fromWallMs < shortestDayMs ? words.shift.between : words.shift.day);
+}
+
+export function windowHours({ fromWallMs, toWallMs }: ShiftWindow, context: ShiftContext): string {
   const { words, offsetMinutesAt } = context;
-  const hasHours = name !== null || toWallMs - fromWallMs < 23 * 3_600_000;
-  const title = name ?? (hasHours ? words.shift.between : words.shift.day);
   const offset = offsetMinutesAt(fromWallMs);
   return words.shift.hours(
-    title,
     dateOf(fromWallMs, offset),
     timeOfDay(fromWallMs, offset),
-    timeOfDay(toWallMs, offsetMinutesAt(toWallMs)),
+    endOfDay(timeOfDay(toWallMs, offsetMinutesAt(toWallMs))),
   );
 }
+
+/** What ends at midnight ends that day, and does not begin it. */
+const endOfDay = (time: string): string => (time === '00:00' ? '24:00' : time);
 
 /** The shift in one sentence. */
 export function shiftSentence(summary: ShiftSummary, context: ShiftContext): string {
@@ -54,6 +62,8 @@ export interface Figure {
   readonly id: 'passed' | 'firstPass' | 'scrapped' | 'inWork';
   readonly name: string;
   readonly value: string;
+  /** Stands after the value, smaller. */
+  readonly unit: string;
   /** Numerator and denominator, and the interval where there is one. */
   readonly beneath: readonly string[];
   readonly formula: string;
@@ -63,17 +73,20 @@ export interface Figure {
 export function shiftFigures(summary: ShiftSummary, { words }: ShiftContext): Figure[] {
   const say = words.shift;
   const { passed, scrapped, finished, carriedIn, started, inWork, firstPass } = summary;
-  const figure = (id: Figure['id'], value: string, beneath: string[]): Figure => ({
+  const figure = (id: Figure['id'], value: string, beneath: string[], unit = ''): Figure => ({
     id,
     name: say.figure[id],
     value,
+    unit,
     beneath,
     formula: say.formulas[id],
   });
   const scrapRatio = ratioOf(scrapped, finished);
   return [
     figure('passed', String(passed), [say.of(passed, carriedIn + started, say.ofHandled)]),
-    figure('firstPass', firstPass ? `${percent(firstPass.share)} %` : say.none, ratioWords(firstPass, words)),
+    firstPass
+      ? figure('firstPass', String(percent(firstPass.share)), ratioWords(firstPass, words), '%')
+      : figure('firstPass', say.none, ratioWords(firstPass, words)),
     figure('scrapped', String(scrapped), ratioWords(scrapRatio, words)),
     figure('inWork', String(inWork), [
       say.of(inWork, carriedIn + started, say.ofHandled),

@@ -41,7 +41,9 @@ export function press(rules: PressRules): (node: HTMLElement) => () => void {
       const { good } = pointer;
       pointer = null;
       lastUpAt = event.timeStamp;
-      if (good && isInside(event)) act();
+      if (!good || !isInside(event)) return;
+      if (view) swallowStrayClick(view, node);
+      act();
     };
     const cancel = (event: PointerEvent): void => {
       if (pointer?.id === event.pointerId) pointer = null;
@@ -65,4 +67,23 @@ export function press(rules: PressRules): (node: HTMLElement) => () => void {
       view?.removeEventListener('pointercancel', cancel, true);
     };
   };
+}
+
+/**
+ * A touch is followed by a click at the same place. What the press took away, a sheet for one, no longer catches it;
+ * whatever has come to light there must not take it for a press of its own. A further touch, or a click without one,
+ * is meant.
+ */
+function swallowStrayClick(view: Window, node: HTMLElement): void {
+  const over = new AbortController();
+  const click = (event: MouseEvent): void => {
+    over.abort();
+    const meant = event.detail === 0 || (event.target instanceof Node && node.contains(event.target));
+    if (meant) return;
+    event.preventDefault();
+    event.stopImmediatePropagation();
+  };
+  const once = { capture: true, signal: over.signal };
+  view.addEventListener('click', click, once);
+  view.addEventListener('pointerdown', () => over.abort(), once);
 }

@@ -33,10 +33,11 @@ function pointer(type: string, target: EventTarget, more: PointerEventInit = {},
   Object.defineProperty(event, 'timeStamp', { value: at });
   target.dispatchEvent(event);
 }
-function click(detail: number, at = now): void {
-  const event = new MouseEvent('click', { bubbles: true, detail });
+function click(detail: number, at = now, target: EventTarget = button): MouseEvent {
+  const event = new MouseEvent('click', { bubbles: true, cancelable: true, detail });
   Object.defineProperty(event, 'timeStamp', { value: at });
-  button.dispatchEvent(event);
+  target.dispatchEvent(event);
+  return event;
 }
 
 test('a tap acts once, although the browser adds a click', () => {
@@ -112,4 +113,35 @@ test('nothing acts while it is blocked', () => {
   pointer('pointerup', button);
   click(0);
   expect(presses).toBe(0);
+});
+
+test('the click of a touch that took its button away acts on nothing that lay beneath', () => {
+  const beneath = document.createElement('a');
+  beneath.href = '#elsewhere';
+  let beneathPresses = 0;
+  press({ onpress: () => beneathPresses++ })(beneath);
+  document.body.append(beneath);
+  pointer('pointerdown', button);
+  pointer('pointerup', button);
+  button.remove();
+  expect(click(1, now + 5, beneath).defaultPrevented).toBe(true);
+  expect([presses, beneathPresses]).toEqual([1, 0]);
+
+  expect(click(1, now + 900, beneath).defaultPrevented).toBe(false);
+  expect(beneathPresses).toBe(1);
+});
+
+test('after a touch whose click never came, the next touch and any key act', () => {
+  const other = document.createElement('button');
+  let others = 0;
+  other.addEventListener('click', () => others++);
+  document.body.append(other);
+  pointer('pointerdown', button);
+  pointer('pointerup', button);
+  click(0, now, other);
+  pointer('pointerdown', button);
+  pointer('pointerup', button);
+  pointer('pointerdown', other);
+  click(1, now + 500, other);
+  expect([presses, others]).toEqual([2, 2]);
 });

@@ -1,14 +1,14 @@
 import { enteredAt, type Entry } from '../event/entry.ts';
 import type { FactOf } from '../event/facts.ts';
 import type { Recipe } from '../recipe/schema.ts';
-import { shifted, type Moment } from '../unit/moment.ts';
+import { shifted } from '../unit/moment.ts';
 import { applyLoadEnded, applyLoadStarted } from './apply-load.ts';
 import { applyJudged, applyMixChanged, applyStepFinished } from './apply-step.ts';
 import { applyBatchClosed, applyScrapped, applySentBack } from './apply-trouble.ts';
 import type { Happened } from './connectors.ts';
 import type { MisfitReason } from './misfit-reasons.ts';
 import { stepIndexIn, type OpenBatch } from './open-batch.ts';
-import type { Trace } from './types.ts';
+import { EntryTrace } from './trace.ts';
 
 export function openBatch(entry: Entry & FactOf<'batchOpened'>, recipe: Recipe): OpenBatch {
   const opened = enteredAt(entry);
@@ -55,11 +55,10 @@ const allowedWhileHeld: ReadonlySet<Entry['type']> = new Set([
 /** Applies one entry: changes the batch, or changes nothing and keeps the entry as a misfit. */
 export function applyToBatch(batch: OpenBatch, entry: Entry): void {
   const ago = 'ago' in entry.data ? (entry.data.ago ?? 0) : 0;
-  const entered = enteredAt(entry);
-  const at = ago === 0 ? entered : shifted(entered, -ago * 1000);
+  const at = ago === 0 ? enteredAt(entry) : shifted(enteredAt(entry), -ago * 1000);
   const misfit = refusal(batch, entry) ?? change(batch, entry, { at, late: ago > 0 });
   if (misfit) batch.misfits.push({ entry: { log: entry.log, seq: entry.seq }, type: entry.type, why: misfit });
-  else batch.traces.push(traceOf(batch, entry, at, entered));
+  else batch.traces.push(new EntryTrace(entry, at, stepOfEntry(batch, entry), connectorsOf(batch, entry)));
 }
 
 function refusal(batch: OpenBatch, entry: Entry): MisfitReason | null {
@@ -106,24 +105,11 @@ function change(batch: OpenBatch, entry: Entry, happened: Happened): MisfitReaso
   }
 }
 
-function traceOf(batch: OpenBatch, entry: Entry, at: Moment, entered: Moment): Trace {
-  return {
-    entry: { log: entry.log, seq: entry.seq },
-    type: entry.type,
-    at,
-    entered,
-    by: entry.by,
-    connectors: connectorsOf(batch, entry),
-    step: stepOfEntry(batch, entry),
-    command: `${entry.page} ${entry.mono}`,
-  };
-}
-
 function connectorsOf(batch: OpenBatch, entry: Entry): readonly number[] {
   if (entry.type === 'loadEnded') {
     return batch.loads.find((load) => load.id === entry.data.load)?.connectors ?? [];
   }
-  return 'connectors' in entry.data && entry.type !== 'batchOpened' ? (entry.data.connectors) : [];
+  return 'connectors' in entry.data && entry.type !== 'batchOpened' ? entry.data.connectors : [];
 }
 
 function stepOfEntry(batch: OpenBatch, entry: Entry): number | null {

@@ -23,14 +23,13 @@ export function applyLoadStarted(batch: OpenBatch, entry: Of<'loadStarted'>, hap
   const when = settle(picked, happened);
   if (!when) return 'earlier than what it follows';
   const handsOnMs = handsOnShareMs(step, picked.length, data.gap);
+  const releases = limitedByMix(batch.recipe, index);
+  const stands = { at: 'load', load: data.load, step: index } as const;
+  const happening = { kind: 'loaded', step: index, load: data.load, handsOnMs, at: when, by: entry.by, entry } as const;
   for (const connector of picked) {
     // A working life that ends in an oven is kept once the tray is in.
-    if (limitedByMix(batch.recipe, index)) connector.mix = null;
-    move(
-      connector,
-      { at: 'load', load: data.load, step: index },
-      { kind: 'loaded', step: index, load: data.load, handsOnMs, at: when, by: entry.by, entry },
-    );
+    if (releases) connector.mix = null;
+    move(connector, stands, happening);
   }
   batch.loads.push({
     id: data.load,
@@ -56,19 +55,19 @@ export function applyLoadEnded(batch: OpenBatch, entry: Of<'loadEnded'>, happene
   if (!when) return 'earlier than what it follows';
   const handsOnMs = unattended(step) ? 0 : handsOnShareMs(step, Math.max(1, inside.length), data.gap);
   const spanMs = elapsedMs(load.from, when);
-  for (const connector of inside) {
-    move(connector, standsAfter(batch.recipe, load.step), {
-      kind: 'unloaded',
-      step: load.step,
-      load: load.id,
-      spanMs,
-      verdict: data.verdict,
-      handsOnMs,
-      at: when,
-      by: entry.by,
-      entry,
-    });
-  }
+  const stands = standsAfter(batch.recipe, load.step);
+  const happening = {
+    kind: 'unloaded',
+    step: load.step,
+    load: load.id,
+    spanMs,
+    verdict: data.verdict,
+    handsOnMs,
+    at: when,
+    by: entry.by,
+    entry,
+  } as const;
+  for (const connector of inside) move(connector, stands, happening);
   batch.loads[position] = { ...load, ended: { ...endingOf(data), at: when, by: entry.by } };
   return null;
 }

@@ -38,17 +38,10 @@ export function applyStepFinished(
   const overrunS = data.overrun?.lateS ?? 0;
   const releases = limitedByMix(batch.recipe, index);
   const stands = standsAfter(batch.recipe, index);
+  const finished = { kind: 'finished', step: index, handsOnMs, overrunS, at: when, by: entry.by, entry } as const;
+  const happening = data.overrun ? { ...finished, overrunReason: data.overrun.reason } : finished;
   for (const connector of picked) {
-    move(connector, stands, {
-      kind: 'finished',
-      step: index,
-      handsOnMs,
-      overrunS,
-      ...(data.overrun ? { overrunReason: data.overrun.reason } : {}),
-      at: when,
-      by: entry.by,
-      entry,
-    });
+    move(connector, stands, happening);
     if (data.mix !== undefined) connector.mix = connector.mixSeen = data.mix;
     else if (releases) connector.mix = null;
   }
@@ -76,20 +69,22 @@ export function applyJudged(batch: OpenBatch, entry: Of<'judged'>, happened: Hap
   const when = settle(picked, happened);
   if (!when) return 'earlier than what it follows';
   const handsOnMs = handsOnShareMs(step, picked.length, data.gap);
-  const defect = data.defect ?? null;
+  const happening = {
+    kind: 'judged',
+    step: index,
+    verdict: data.verdict,
+    defect: data.defect ?? null,
+    handsOnMs,
+    at: when,
+    by: entry.by,
+    entry,
+  } as const;
+  const passes = data.verdict === 'pass';
+  const after = passes ? standsAfter(batch.recipe, index) : null;
+  const releases = passes && limitedByMix(batch.recipe, index);
   for (const connector of picked) {
-    if (data.verdict === 'pass' && limitedByMix(batch.recipe, index)) connector.mix = null;
-    const stands = data.verdict === 'pass' ? standsAfter(batch.recipe, index) : connector.stands;
-    move(connector, stands, {
-      kind: 'judged',
-      step: index,
-      verdict: data.verdict,
-      defect,
-      handsOnMs,
-      at: when,
-      by: entry.by,
-      entry,
-    });
+    if (releases) connector.mix = null;
+    move(connector, after ?? connector.stands, happening);
   }
   return null;
 }

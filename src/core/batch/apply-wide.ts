@@ -1,8 +1,8 @@
-import { enteredAt, type Entry } from '../event/entry.ts';
+import { enteredAt, type Entry, type EntryId } from '../event/entry.ts';
 import type { Recipe } from '../recipe/schema.ts';
-import { shifted, type Moment } from '../unit/moment.ts';
+import { shifted } from '../unit/moment.ts';
 import type { MisfitReason } from './misfit-reasons.ts';
-import type { BenchWide, Oven, OvenHappening } from './types.ts';
+import type { BenchWide, Misfit, OvenHappening } from './types.ts';
 
 export const emptyBenchWide: BenchWide = {
   tablet: '',
@@ -22,82 +22,98 @@ export const emptyBenchWide: BenchWide = {
 /** Reads the text of a recipe as it travelled in the log; null where it is not one. */
 export type ReadRecipe = (text: string) => Recipe | null;
 
-/** Applies one bench-wide entry; one that does not fit changes nothing else and is kept as a misfit. */
-export function applyWide(wide: BenchWide, entry: Entry, readRecipe: ReadRecipe): BenchWide {
-  const changed = change(wide, entry, readRecipe);
-  if (typeof changed !== 'string') return changed;
-  const misfit = { entry: { log: entry.log, seq: entry.seq }, type: entry.type, why: changed };
-  return { ...wide, misfits: [...wide.misfits, misfit] };
+type Register = 'recipes' | 'mixes' | 'ovens' | 'seen';
+
+/** Bench-wide state while it is being folded: its registers are copies and grow in place. */
+export type OpenWide = { -readonly [Key in keyof Omit<BenchWide, Register | 'misfits'>]: BenchWide[Key] } & {
+  readonly [Key in Register]: Record<string, BenchWide[Key][string]>;
+} & {
+  readonly misfits: Misfit[];
+  /** Histories of ovens that are copies already. */
+  readonly histories: Map<string, OvenHappening[]>;
+};
+
+export function openWide({ recipes, mixes, ovens, seen, misfits, ...rest }: BenchWide): OpenWide {
+  const copies = { recipes: { ...recipes }, mixes: { ...mixes }, ovens: { ...ovens }, seen: { ...seen } };
+  return { ...rest, ...copies, misfits: [...misfits], histories: new Map() };
 }
 
-function change(wide: BenchWide, entry: Entry, readRecipe: ReadRecipe): BenchWide | MisfitReason {
-  const entered = enteredAt(entry);
+/** Applies one bench-wide entry; one that does not fit changes nothing else and is kept as a misfit. */
+export function applyToWide(wide: OpenWide, entry: Entry, readRecipe: ReadRecipe): void {
+  const misfit = change(wide, entry, readRecipe);
+  if (misfit) wide.misfits.push({ entry: { log: entry.log, seq: entry.seq }, type: entry.type, why: misfit });
+}
+
+function change(wide: OpenWide, entry: Entry, readRecipe: ReadRecipe): MisfitReason | null {
   const ago = 'ago' in entry.data ? (entry.data.ago ?? 0) : 0;
-  const at = shifted(entered, -ago * 1000);
+  const at = shifted(enteredAt(entry), -ago * 1000);
   switch (entry.type) {
     case 'tabletStarted':
     case 'clockSet':
     case 'tabletWoke':
-      return wide;
+      return null;
     case 'timeStated':
-      return { ...wide, unknownGap: null };
+      wide.unknownGap = null;
+      return null;
     case 'benchSet':
-      return { ...wide, tablet: entry.data.tablet, operators: entry.data.operators, shifts: entry.data.shifts };
+      wide.tablet = entry.data.tablet;
+      wide.operators = entry.data.operators;
+      wide.shifts = entry.data.shifts;
+      return null;
     case 'shiftChanged':
-      return { ...wide, onShift: { operator: entry.data.operator, shift: entry.data.shift, since: at } };
+      wide.onShift = { operator: entry.data.operator, shift: entry.data.shift, since: at };
+      return null;
     case 'recipeTaken': {
       const recipe = readRecipe(entry.data.text);
       if (!recipe) return 'recipe unknown';
-      const taken = { hash: entry.data.hash, recipe };
-      return { ...wide, recipes: { ...wide.recipes, [entry.data.hash]: taken } };
+      wide.recipes[entry.data.hash] = { hash: entry.data.hash, recipe };
+      return null;
     }
     case 'adhesiveMixed': {
       const { mix: id, adhesive, lot, workingLifeS, roomC } = entry.data;
-      const mix = { id, adhesive, lot, mixed: at, by: entry.by, workingLifeS, roomC };
-      return { ...wide, mixes: { ...wide.mixes, [id]: mix } };
+      wide.mixes[id] = { id, adhesive, lot, mixed: at, by: entry.by, workingLifeS, roomC };
+      return null;
     }
     case 'ovenSet': {
       const { oven, name, setPointC, warmUpS } = entry.data;
-      return ovenChanged(wide, oven, name, at, { kind: 'set', setPointC, warmUpS, at, entry });
+      return ovenChanged(wide, oven, name, { kind: 'set', setPointC, warmUpS, at, entry: bare(entry) });
     }
     case 'ovenRead': {
       const { oven, temperatureC } = entry.data;
-      return ovenChanged(wide, oven, null, at, { kind: 'read', temperatureC, at, entry });
+      return ovenChanged(wide, oven, null, { kind: 'read', temperatureC, at, entry: bare(entry) });
     }
     case 'ovenDisturbed':
-      return ovenChanged(wide, entry.data.oven, null, at, { kind: entry.data.what, at, entry });
+      return ovenChanged(wide, entry.data.oven, null, { kind: entry.data.what, at, entry: bare(entry) });
     case 'clockSeen':
-      return { ...wide, seen: { ...wide.seen, [entry.data.clock]: { at, lateS: entry.data.lateS } } };
+      wide.seen[entry.data.clock] = { at, lateS: entry.data.lateS };
+      return null;
     default:
       return 'unknown entry';
   }
 }
 
-function ovenChanged(
-  wide: BenchWide,
-  id: string,
-  name: string | null,
-  at: Moment,
-  happening: OvenHappening,
-): BenchWide {
+const bare = ({ log, seq }: EntryId): EntryId => ({ log, seq });
+
+function ovenChanged(wide: OpenWide, id: string, name: string | null, happening: OvenHappening): null {
   const before = wide.ovens[id];
-  const oven: Oven = {
-    id,
-    name: name ?? before?.name ?? id,
-    history: insertByTime(before?.history ?? [], { ...happening, entry: bare(happening.entry) }),
-  };
-  return { ...wide, ovens: { ...wide.ovens, [id]: oven } };
+  let history = wide.histories.get(id);
+  if (!history) {
+    history = [...(before?.history ?? [])];
+    wide.histories.set(id, history);
+  }
+  insertByTime(history, happening);
+  wide.ovens[id] = { id, name: name ?? before?.name ?? id, history };
+  return null;
 }
 
-const bare = ({ log, seq }: OvenHappening['entry']) => ({ log, seq });
-
 /** A late reading belongs where it happened; within one log bench time decides, across logs entry order stands. */
-function insertByTime(history: readonly OvenHappening[], added: OvenHappening): readonly OvenHappening[] {
+function insertByTime(history: OvenHappening[], added: OvenHappening): void {
   let place = history.length;
   while (place > 0) {
     const earlier = history[place - 1];
     if (!earlier || earlier.at.log !== added.at.log || earlier.at.bench <= added.at.bench) break;
     place -= 1;
   }
-  return [...history.slice(0, place), added, ...history.slice(place)];
+  if (place === history.length) history.push(added);
+  else history.splice(place, 0, added);
 }

@@ -16,20 +16,33 @@ export function stepOf(connector: Connector): number | null {
   return connector.stands.at === 'passed' ? null : connector.stands.step;
 }
 
-/** Where a connector stands once it is past a step: at the next, or passed. */
+const passed: Stands = { at: 'passed' };
+const places = new WeakMap<Recipe, readonly Stands[]>();
+
+/** Where a connector stands once it is past a step: at the next, or passed. All that stand there share one object. */
 export function standsAfter(recipe: Recipe, step: number): Stands {
-  return step + 1 < recipe.steps.length ? { at: 'step', step: step + 1 } : { at: 'passed' };
+  let after = places.get(recipe);
+  if (!after) {
+    after = recipe.steps.slice(1).map((_, index): Stands => ({ at: 'step', step: index + 1 }));
+    places.set(recipe, after);
+  }
+  return after[step] ?? passed;
 }
 
 /** The named connectors, or why they cannot be meant. */
 export function pick(connectors: readonly OpenConnector[], numbers: readonly number[]): OpenConnector[] | MisfitReason {
   const picked: OpenConnector[] = [];
+  let rising = true;
+  let last = 0;
   for (const number of numbers) {
     const connector = connectors[number - 1];
     if (!connector) return 'no such connector';
     picked.push(connector);
+    rising &&= number > last;
+    last = number;
   }
-  if (numbers.length > 1 && new Set(numbers).size !== numbers.length) return 'connector named twice';
+  // Numbers that only rise, as they nearly always do, cannot repeat.
+  if (!rising && new Set(numbers).size !== numbers.length) return 'connector named twice';
   return picked;
 }
 
@@ -54,7 +67,7 @@ export interface Happened {
   readonly late: boolean;
 }
 
-/** Moves a connector and remembers why. */
+/** Moves a connector and remembers why. What moved several at once is one object, which they share. */
 export function move(connector: OpenConnector, stands: Stands, happening: Happening): void {
   connector.stands = stands;
   connector.since = happening.at;

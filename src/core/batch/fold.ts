@@ -1,6 +1,6 @@
-import { benchWide, type Entry } from '../event/entry.ts';
+import { benchWide, enteredAt, type Entry, type Envelope } from '../event/entry.ts';
 import { applyToBatch, openBatch } from './apply-batch.ts';
-import { applyWide, emptyBenchWide, type ReadRecipe } from './apply-wide.ts';
+import { applyToWide, emptyBenchWide, openWide, type ReadRecipe } from './apply-wide.ts';
 import type { OpenBatch } from './open-batch.ts';
 import type { Batch, Bench, BenchWide, Misfit, TakenRecipe } from './types.ts';
 import { standing } from './voids.ts';
@@ -11,7 +11,12 @@ export function foldWide(
   readRecipe: ReadRecipe,
   from: BenchWide = emptyBenchWide,
 ): BenchWide {
-  return standing(entries).reduce((wide, entry) => applyWide(wide, entry, readRecipe), from);
+  const counting = standing(entries);
+  if (counting.length === 0) return from;
+  const open = openWide(from);
+  for (const entry of counting) applyToWide(open, entry, readRecipe);
+  const { histories: _copies, ...wide } = open;
+  return wide;
 }
 
 export interface FoldedBatch {
@@ -79,16 +84,27 @@ export function foldBench(entries: readonly Entry[], readRecipe: ReadRecipe): Be
  * page whose wall clock stands behind the last line leaves a gap of unknown length until a person states it.
  */
 export function noteEntries(wide: BenchWide, entries: readonly Entry[]): BenchWide {
-  const lastEntry = { ...wide.lastEntry };
-  const lastEntryBy = { ...wide.lastEntryBy };
+  const last = new Map<string, Envelope>();
+  const lastBy = new Map<string, Map<string, Envelope>>();
   let { unknownGap } = wide;
   for (const entry of entries) {
-    const at = { log: entry.log, bench: entry.bench, wall: entry.wall };
-    const before = lastEntry[entry.log];
-    if (entry.type === 'tabletStarted' && before && entry.wall < before.wall) unknownGap = { since: before };
-    if (entry.type === 'timeStated') unknownGap = null;
-    lastEntry[entry.log] = at;
-    if (entry.by !== '') lastEntryBy[`${entry.log} ${entry.by}`] = at;
+    const { log, by } = entry;
+    if (entry.type === 'tabletStarted') {
+      const noted = last.get(log);
+      const before = noted ? enteredAt(noted) : wide.lastEntry[log];
+      if (before && entry.wall < before.wall) unknownGap = { since: before };
+    } else if (entry.type === 'timeStated') unknownGap = null;
+    last.set(log, entry);
+    if (by === '') continue;
+    const people = lastBy.get(log);
+    if (people) people.set(by, entry);
+    else lastBy.set(log, new Map([[by, entry]]));
+  }
+  const lastEntry = { ...wide.lastEntry };
+  for (const [log, entry] of last) lastEntry[log] = enteredAt(entry);
+  const lastEntryBy = { ...wide.lastEntryBy };
+  for (const [log, people] of lastBy) {
+    for (const [by, entry] of people) lastEntryBy[`${log} ${by}`] = enteredAt(entry);
   }
   return { ...wide, lastEntry, lastEntryBy, unknownGap };
 }

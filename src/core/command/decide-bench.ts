@@ -78,8 +78,9 @@ export function decideStateTime(command: Of<'state time'>): Decision {
   return ok([{ batch: benchWide, type: 'timeStated', v: 1, data: { addedS: command.addedS } }]);
 }
 
-export function decideSeeClock(command: Of<'see clock'>): Decision {
+export function decideSeeClock(bench: Bench, command: Of<'see clock'>): Decision {
   const { batch, clock, lateS } = command;
+  if (batch !== benchWide && !bench.batches[batch]) return refuse({ code: 'batch unknown', batch });
   const draft: Draft = { batch, type: 'clockSeen', v: 1, data: { clock, lateS: Math.round(lateS) } };
   return ok([draft]);
 }

@@ -15,11 +15,11 @@ export const longestSerial = 40;
 /** As many as TIA-598 has colours. */
 export const tagCount = 12;
 
-/** The tags that open batches wear. */
-export function tagsTaken(bench: Bench): ReadonlySet<number> {
+/** The tags that open batches wear, but for one of them. */
+export function tagsTaken(bench: Bench, except?: string): ReadonlySet<number> {
   return new Set(
     Object.values(bench.batches)
-      .filter((batch) => !batch.closed)
+      .filter((batch) => !batch.closed && batch.id !== except)
       .map((batch) => batch.tag),
   );
 }

@@ -14,10 +14,11 @@ import {
   decideStateTime,
 } from './decide-bench.ts';
 import { decideEndLoad, decideStartLoad } from './decide-load.ts';
-import { decideOpenBatch, decideTakeRecipe } from './decide-open.ts';
+import { decideOpenBatch, decideTakeRecipe, tagsTaken } from './decide-open.ts';
 import { decideFinishStep, decideMixAdhesive, decideUseMix } from './decide-step.ts';
 import { decidePass, decideScrap, decideSendBack } from './decide-trouble.ts';
 import { decideUndo, decideVoid } from './decide-void.ts';
+import type { Refusal } from './refusal.ts';
 
 /**
  * The one place where a wish becomes entries or a refusal. What is decided is tried on the batch before it is handed
@@ -26,9 +27,8 @@ import { decideUndo, decideVoid } from './decide-void.ts';
 export function decide(bench: Bench, command: Command, context: Context): Decision {
   const decision = choose(bench, command, context);
   if (!decision.ok) return decision;
-  const why = misfitOf(bench, decision.value, context);
-  if (why === null) return decision;
-  return refuse(why === earlier ? { code: earlier } : { code: 'does not fit', why });
+  const unfit = tryOut(bench, decision.value, context);
+  return unfit ? refuse(unfit) : decision;
 }
 
 const earlier = 'earlier than what it follows';
@@ -68,7 +68,7 @@ function choose(bench: Bench, command: Command, context: Context): Decision {
     case 'void':
       return decideVoid(bench, command);
     case 'see clock':
-      return decideSeeClock(command);
+      return decideSeeClock(bench, command);
     case 'set bench':
       return decideSetBench(command);
     case 'sign on':
@@ -86,17 +86,21 @@ function choose(bench: Bench, command: Command, context: Context): Decision {
   }
 }
 
-/** Why a decided entry would be a misfit, found by folding the batch with it; null where all fit. */
-function misfitOf(bench: Bench, drafts: readonly Draft[], context: Context): string | null {
+/**
+ * Why decided entries cannot stand, found by folding their batch with them: one would be a misfit, or a batch that they
+ * open again would wear the tag of another.
+ */
+function tryOut(bench: Bench, drafts: readonly Draft[], context: Context): Refusal | null {
   const touched = new Set(drafts.map((draft) => draft.batch).filter((batch) => batch !== benchWide));
   for (const id of touched) {
     const before = bench.entries[id] ?? [];
     if (before.length === 0) continue;
     const added = drafts.filter((draft) => draft.batch === id).map((draft, index) => pretend(draft, index, context));
     const known = new Set(bench.batches[id]?.misfits.map(({ entry }) => `${entry.log} ${entry.seq}`));
-    const folded = foldBatch([...before, ...added], bench.wide.recipes);
-    const misfit = folded.misfits.find(({ entry }) => !known.has(`${entry.log} ${entry.seq}`));
-    if (misfit) return misfit.why;
+    const { batch, misfits } = foldBatch([...before, ...added], bench.wide.recipes);
+    const misfit = misfits.find(({ entry }) => !known.has(`${entry.log} ${entry.seq}`));
+    if (misfit) return misfit.why === earlier ? { code: earlier } : { code: 'does not fit', why: misfit.why };
+    if (batch && !batch.closed && tagsTaken(bench, id).has(batch.tag)) return { code: 'tag taken', tag: batch.tag };
   }
   return null;
 }

@@ -81,6 +81,8 @@ export const batch = {
   oven: {
     title: 'Which oven?',
     unnamed: 'Another oven, at the recipe’s set point',
+    noneEntered: 'At the recipe’s set point; no oven entered',
+    enterOven: 'Enter an oven',
     setPoint: (c: string) => `set to ${c} °C`,
     read: (c: string, time: string) => `read ${c} °C at ${time}`,
     off: 'power cut: set it again',

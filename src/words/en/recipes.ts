@@ -98,6 +98,8 @@ export const recipes = {
     loadOf: (goes: string, most: number) => `${goes}, ${most} at most`,
     standard: (setup: string, each: string) =>
       setup === '' ? `standard ${each} each` : each === '' ? `standard ${setup}` : `standard ${setup} and ${each} each`,
+    seconds: (seconds: string) => `${seconds} s`,
+    minutes: (minutes: string) => `${minutes} min`,
     noStandard: 'no standard time',
     limitsStep: (step: string) => `The working life ends with: ${step}.`,
     back: (step: string, defects: string) => `Back to “${step}”: ${defects}.`,
@@ -118,6 +120,7 @@ export const recipes = {
     wayBack: (defect: string) => `Way back for “${defect}”`,
     reading: (quantity: string) => `Limit of ${quantity}`,
   },
+  findings: 'Findings',
   materials: 'Materials',
   tools: 'Tools',
 };

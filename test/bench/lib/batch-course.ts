@@ -71,7 +71,8 @@ function next(group: Group, step: Step, connectors: readonly number[], turn: num
     const nextLoad = `next-${turn}-${idMark}`;
     return { type: 'end load', batch: courseBatch, load: group.load.id, nextLoad, reason: 'as measured by the oven' };
   }
-  if (step.kind === 'mix') return { type: 'mix adhesive', ...on, mix: `mix-${turn}-${idMark}`, lot: 'A-2291', roomC: 22 };
+  if (step.kind === 'mix')
+    return { type: 'mix adhesive', ...on, mix: `mix-${turn}-${idMark}`, lot: 'A-2291', roomC: 22 };
   if (isTimed(step)) return { type: 'start load', ...on, step: step.id, load: `load-${turn}-${idMark}`, station: '' };
   const fault = step.sendsBack[Math.floor(chance() * step.sendsBack.length)];
   if (fault && connectors[0] !== undefined && chance() < 0.03) {

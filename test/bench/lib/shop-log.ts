@@ -2,7 +2,6 @@ import { createHash } from 'node:crypto';
 import { benchOf } from '../../../src/core/event/bench-time.ts';
 import { nextTime } from '../../../src/core/event/clock.ts';
 import type { Draft, Head, Line } from '../../../src/core/event/entry.ts';
-import { headAfter } from '../../../src/core/event/line.ts';
 import { hashOfNothing } from '../../../src/core/event/hash.ts';
 import { recipeSchema } from '../../../src/core/recipe/schema.ts';
 import { courseOf, idMark, courseBatch, type CourseEntry } from './batch-course.ts';
@@ -49,10 +48,11 @@ export function shopLog(options: ShopLogOptions): ShopLog {
     const last = course.at(-1)?.atMs ?? 0;
     return place(course, id, index + 1, options.endWallMs - last - index * 90_000);
   });
-  const head = [...recipes.map((recipe) => wide('recipeTaken', { hash: sha256(JSON.stringify(recipe)), text: JSON.stringify(recipe) })),
-    wide('benchSet', { tablet: 'Bench 1', operators: ['MK', 'TO'], shifts: [] })];
+  const texts = recipes.map((recipe) => JSON.stringify(recipe));
+  const taken = texts.map((text) => benchWide('recipeTaken', { hash: sha256(text), text }));
+  const front = [...taken, benchWide('benchSet', { tablet: 'Bench 1', operators: ['MK', 'TO'], shifts: [] })];
   let begun = options.endWallMs - dayMs / 8;
-  for (let made = 0; placed.length < options.entries - head.length; made += 1) {
+  for (let made = 0; placed.length < options.entries - front.length; made += 1) {
     const course = courses[Math.floor(chance() * courses.length)] ?? [];
     const lasts = course.at(-1)?.atMs ?? 0;
     placed.push(...place(course, `made-${made}`, (made % 9) + 4, begun - lasts));
@@ -60,16 +60,19 @@ export function shopLog(options: ShopLogOptions): ShopLog {
   }
   placed.sort((a, b) => a.wall - b.wall);
   const first = placed[0]?.wall ?? options.endWallMs;
-  return chained([...head.map((each) => ({ ...each, wall: first - 60_000 })), ...placed]);
+  return chained([...front.map((each) => ({ ...each, wall: first - 60_000 })), ...placed]);
 }
 
-const wide = (type: string, data: object) => ({ batch: 'bench', by: 'MK', type, data: JSON.stringify(data) });
+const benchWide = (type: string, data: object) => ({ batch: 'bench', by: 'MK', type, data: JSON.stringify(data) });
 
 function upTo(course: readonly CourseEntry[], until: 'cure' | 'inspect' | 'end'): readonly CourseEntry[] {
   if (until === 'end') return course;
-  const cure = course.findIndex(({ type }) => type === 'loadStarted');
-  if (until === 'cure') return course.slice(0, cure + 1);
-  return course.slice(0, course.findLastIndex(({ type }) => type === 'loadEnded') + 2);
+  if (until === 'cure') return course.slice(0, course.findIndex(({ type }) => type === 'loadStarted') + 1);
+  // The first check of one connector alone is the last inspection: all have come to it.
+  return course.slice(
+    0,
+    course.findIndex(({ type, data }) => type === 'judged' && /"connectors":\[\d+\]/.test(data)),
+  );
 }
 
 function place(course: readonly CourseEntry[], id: string, tag: number, begun: number): Placed[] {
@@ -86,31 +89,32 @@ function place(course: readonly CourseEntry[], id: string, tag: number, begun: n
 function chained(placed: readonly Placed[]): ShopLog {
   const lines: Line[] = [];
   let head: Head | null = null;
-  let pageBegun = -Infinity;
-  const write = ({ wall, batch, by, type, data }: Placed, page: string): Head => {
-    const mono = Math.max(0, wall - pageBegun);
-    const seq: number = (head?.seq ?? 0) + 1;
-    const time = nextTime(head?.time ?? null, wall);
-    const bench = benchOf(head, { type } as Draft, { wall, mono, page });
-    const envelope = { log: logId, seq, time, bench, wall, mono, page, offset: 0, zone: 'UTC', by, batch, type, v: 1 };
-    const prev: string = head?.hash ?? hashOfNothing;
-    const text = `${JSON.stringify(envelope).slice(0, -1)},"data":${data},"prev":"${prev}"}`;
-    lines.push({ log: logId, seq, batch, text });
-    const hashed = { ...headAfter({ ...envelope, prev }, ''), hash: sha256(text) };
-    head = hashed;
-    return hashed;
-  };
-  let last: Head | null = null;
+  let pageBegun = 0;
   for (const each of placed) {
     const page = `page-${Math.floor(each.wall / dayMs)}`;
     if (page !== head?.page) {
       pageBegun = each.wall;
-      write({ ...each, batch: 'bench', by: '', type: 'tabletStarted', data: '{"app":"bench"}' }, page);
+      head = append(lines, head, { ...each, ...pageStart }, page, 0);
     }
-    last = write(each, page);
+    head = append(lines, head, each, page, each.wall - pageBegun);
   }
-  if (last === null) throw new Error('a log has at least one entry');
-  return { lines, head: last };
+  if (head === null) throw new Error('a log has at least one entry');
+  return { lines, head };
+}
+
+const pageStart = { batch: 'bench', by: '', type: 'tabletStarted', data: '{"app":"bench"}' };
+
+function append(lines: Line[], head: Head | null, placed: Placed, page: string, mono: number): Head {
+  const { wall, batch, by, type, data } = placed;
+  const seq = (head?.seq ?? 0) + 1;
+  const time = nextTime(head?.time ?? null, wall);
+  const bench = benchOf(head, { type } as Draft, { wall, mono, page });
+  const envelope = { log: logId, seq, time, bench, wall, mono, page, offset: 0, zone: 'UTC', by, batch };
+  const prev = head?.hash ?? hashOfNothing;
+  const front = JSON.stringify({ ...envelope, type, v: 1 }).slice(0, -1);
+  const text = `${front},"data":${data},"prev":"${prev}"}`;
+  lines.push({ log: logId, seq, batch, text });
+  return { log: logId, seq, hash: sha256(text), time, bench, wall, mono, page };
 }
 
 const sha256 = (text: string): string => createHash('sha256').update(text).digest('hex');

@@ -1,24 +1,24 @@
 import { expect, type Locator, type Page } from '@playwright/test';
 import { en } from '../../../src/words/en.ts';
 import { numberList } from '../../../src/words/format.ts';
-import { button, choose, press, tap, type } from './press.ts';
+import { button, choose, press, tap, tapChoice, toBench, toPage, type } from './press.ts';
 
 const say = en.batch;
 
-/** Starts a batch from the bench and answers with the address of its page. */
-export async function openBatch(page: Page, workOrder: string, connectors: number, recipe: string): Promise<string> {
-  await page.goto('/#/new');
+/** Starts a batch from the bench; its page opens. */
+export async function openBatch(page: Page, workOrder: string, connectors: number, recipe: string): Promise<void> {
+  await toPage(page, 'start');
   await type(page, en.newBatch.workOrder, workOrder);
   await type(page, en.newBatch.connectors, String(connectors));
   await choose(page, en.newBatch.recipe, new RegExp(recipe));
   await press(page, new RegExp(`^Start ${connectors} on tag \\d+$`));
   await expect(page).toHaveURL(/#\/batch\//);
-  return new URL(page.url()).hash;
 }
 
-/** Goes to the page of a batch, as by its tag on the bench. */
-export async function goTo(page: Page, address: string): Promise<void> {
-  await page.goto(`/${address}`);
+/** Goes to the page of a batch by its tag on the bench. */
+export async function goTo(page: Page, workOrder: string): Promise<void> {
+  await toBench(page);
+  await page.getByRole('article').filter({ hasText: workOrder }).getByRole('link').tap();
   await expect(page.getByRole('button', { name: /^Trouble|^Open it again/ })).toBeVisible();
 }
 
@@ -66,7 +66,7 @@ export async function readOven(page: Page, digits: string): Promise<void> {
 /** Opens the sheet for trouble with the connectors that the main action names, and says what was found. */
 async function found(page: Page, number: number, finding: string): Promise<void> {
   await tap(page, say.trouble(String(number)));
-  await choose(page, say.troubleSheet.finding, finding);
+  await tapChoice(page, say.troubleSheet.finding, finding);
 }
 
 export async function sendBack(page: Page, number: number, finding: string, step: string): Promise<void> {
@@ -74,7 +74,13 @@ export async function sendBack(page: Page, number: number, finding: string, step
   await press(page, new RegExp(`^${say.troubleSheet.sendBack(step)}`));
 }
 
-export async function cutOff(page: Page, number: number, finding: string, step: string, cableMm: number): Promise<void> {
+export async function cutOff(
+  page: Page,
+  number: number,
+  finding: string,
+  step: string,
+  cableMm: number,
+): Promise<void> {
   await found(page, number, finding);
   const label = say.troubleSheet.cutOff(step, cableMm).replace(/[()]/g, '\\$&');
   await press(page, new RegExp(`^${label}`));
@@ -104,3 +110,9 @@ export async function see(page: Page, title: string, ...texts: string[]): Promis
 /** What the rail of clocks shows, in its order: "0:30". */
 export const railTimes = (page: Page): Promise<string[]> =>
   page.getByRole('navigation', { name: en.bench.railName }).locator('time').allInnerTexts();
+
+/** After a restart the page first says where one was. */
+export async function goOn(page: Page): Promise<void> {
+  await tap(page, en.bench.away.goOn);
+  await expect(page.getByRole('dialog')).toHaveCount(0);
+}

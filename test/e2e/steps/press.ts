@@ -32,9 +32,28 @@ export async function acknowledged(page: Page, linesBefore: number): Promise<voi
 export const type = (page: Page | Locator, label: string, text: string): Promise<void> =>
   page.getByRole('textbox', { name: label, exact: true }).fill(text);
 
-/** Chooses one of several by what its label says. */
+/** One of several, by what its label says. */
+const choice = (page: Page, group: string, label: string | RegExp): Locator =>
+  page.getByRole('group', { name: group }).getByRole('radio', { name: label }).first();
+
+/** A finger on a choice; where it leads on at once, the choice itself is gone then. */
+export const tapChoice = (page: Page, group: string, label: string | RegExp): Promise<void> =>
+  choice(page, group, label).locator('xpath=ancestor::label').tap();
+
 export async function choose(page: Page, group: string, label: string | RegExp): Promise<void> {
-  const radio = page.getByRole('group', { name: group }).getByRole('radio', { name: label }).first();
-  await radio.locator('xpath=ancestor::label').tap();
-  await expect(radio).toBeChecked();
+  await tapChoice(page, group, label);
+  await expect(choice(page, group, label)).toBeChecked();
+}
+
+/** Back to the bench, from any page, by the bar at the top. */
+export async function toBench(page: Page): Promise<void> {
+  const back = page.getByRole('banner').getByRole('link', { name: en.common.back });
+  if (await back.isVisible()) await back.tap();
+  await expect(page.getByRole('button', { name: en.bench.settings, exact: true })).toBeVisible();
+}
+
+/** To one of the pages that the bench leads to. */
+export async function toPage(page: Page, name: 'settings' | 'ovens' | 'start' | 'recipes'): Promise<void> {
+  await toBench(page);
+  await tap(page, en.bench[name]);
 }

@@ -1,6 +1,6 @@
 import { expect, type Page } from '@playwright/test';
 import { en } from '../../../src/words/en.ts';
-import { choose, press, tap, type } from './press.ts';
+import { choose, press, tap, toPage, type } from './press.ts';
 
 const say = en.settings;
 
@@ -12,7 +12,7 @@ export interface Shop {
 
 /** Tablet, people, hours; then the first of them signs on. */
 export async function setUpShop(page: Page, { tablet, operators, shift }: Shop): Promise<void> {
-  await page.goto('/#/settings');
+  await toPage(page, 'settings');
   await type(page, say.bench.tablet, tablet);
   for (const initials of operators) {
     await type(page, say.bench.initials, initials);
@@ -30,12 +30,12 @@ export async function setUpShop(page: Page, { tablet, operators, shift }: Shop):
 
 /** Everything is kept on the tablet: from now on the server may go. */
 export async function waitUntilReadyOffline(page: Page): Promise<void> {
-  await page.goto('/#/settings');
+  await toPage(page, 'settings');
   await expect(page.getByText(say.offline.state['ready offline'])).toBeVisible();
 }
 
 export async function addOven(page: Page, name: string, setPointC: string): Promise<void> {
-  await page.goto('/#/ovens');
+  await toPage(page, 'ovens');
   await tap(page, en.ovens.action.add);
   const sheet = page.getByRole('dialog', { name: en.ovens.sheet.add });
   await type(sheet, en.ovens.sheet.name, name);

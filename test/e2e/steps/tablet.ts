@@ -21,6 +21,7 @@ export async function switchOn(profile: string, address: string, wallMs: number)
     hasTouch: true,
     timezoneId: 'UTC',
   });
+  context.setDefaultTimeout(15_000);
   await installClock(context, wallMs);
   const page = context.pages()[0] ?? (await context.newPage());
   await page.goto('/');
