@@ -72,8 +72,11 @@ export class BatchPage {
 
   /** Asks; what needs a reason opens the sheet for it, any other refusal is told where the thumb is. */
   async ask(command: Command): Promise<boolean> {
+    const shown = this.view?.key ?? null;
     const answer = await this.#bench.ask(command);
     if (answer.ok) {
+      // Who sends one back goes on with the others at the same step.
+      if (command.type === 'send back') this.#shown = shown;
       this.#tapped = new Set();
       this.close();
       return true;

@@ -17,9 +17,7 @@ export interface BenchDraft {
   readonly shifts: readonly ShiftDraft[];
 }
 
-/** As many as one entry holds. */
-export const mostOperators = 40;
-export const mostShifts = 6;
+export { mostOperators, mostShifts } from '../core/command/decide-bench.ts';
 
 export function draftOf({ tablet, operators, shifts }: BenchWide): BenchDraft {
   return { tablet, operators, shifts };

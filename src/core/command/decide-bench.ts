@@ -10,6 +10,9 @@ type Of<Type extends Command['type']> = Extract<Command, { type: Type }>;
 const initialsForm = /^\p{L}[\p{L}\p{N}]{0,3}$/u;
 const clockForm = /^([01]\d|2[0-3]):[0-5]\d$/;
 const longestName = 80;
+/** As many as an entry can hold. */
+export const mostOperators = 40;
+export const mostShifts = 6;
 /** The longest time that a tablet is believed to have been off, in seconds: 30 days. */
 export const mostStatedS = 30 * 86400;
 
@@ -20,6 +23,8 @@ export function decideSetBench(command: Of<'set bench'>): Decision {
   for (const found of operators) if (!initialsForm.test(found)) return refuse({ code: 'initials unfit', found });
   const twice = operators.find((found, index) => operators.indexOf(found) !== index);
   if (twice !== undefined) return refuse({ code: 'initials twice', found: twice });
+  if (operators.length > mostOperators) return refuse({ code: 'too many', what: 'operators', most: mostOperators });
+  if (command.shifts.length > mostShifts) return refuse({ code: 'too many', what: 'shifts', most: mostShifts });
   const shifts = [];
   for (const shift of command.shifts) {
     const name = requiredText(shift.name, 'shift name', longestName);

@@ -60,6 +60,7 @@ export type Refusal =
       readonly highest: number;
     }
   | { readonly code: 'warm-up out of range'; readonly found: number; readonly mostS: number }
+  | { readonly code: 'too many'; readonly what: 'operators' | 'shifts'; readonly most: number }
   | { readonly code: 'initials unfit'; readonly found: string }
   | { readonly code: 'initials twice'; readonly found: string }
   | { readonly code: 'operator unknown'; readonly operator: string }

@@ -72,6 +72,7 @@ export const refusal: { readonly [Code in RefusalCode]: Sentence<Code> } = {
   'temperature out of range': ({ found, lowest, highest }) =>
     `${found} °C cannot be right here: ${lowest} to ${highest} °C.`,
   'warm-up out of range': ({ mostS }) => `The warm-up is 0 to ${mostS / 60} min.`,
+  'too many': ({ what, most }) => `At most ${most} ${what}.`,
   'initials unfit': ({ found }) => `“${found}”: initials are 1 to 4 letters or digits, a letter first.`,
   'initials twice': ({ found }) => `${found} stands there twice.`,
   'operator unknown': ({ operator }) => `${operator} is not among the operators in Settings.`,
