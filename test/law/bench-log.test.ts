@@ -126,7 +126,7 @@ describe('laws of the bench log', () => {
           expect(doses(log.bench, log)).toEqual(doses(now, log));
         }
       }),
-      { numRuns: 50 },
+      { numRuns: 45 },
     );
     for (const kind of ['undo', 'void', 'void of the bench', 'reopen batch', 'use mix', 'read oven', 'start load']) {
       expect(accepted.get(kind) ?? 0, kind).toBeGreaterThan(0);
@@ -151,7 +151,7 @@ describe('laws of the bench log', () => {
         expect(await log.summaryRows(0)).toHaveLength(rows.length);
         for (const report of verify(linesIn(place)).values()) expect(report.state).toBe('unbroken');
       }),
-      { numRuns: 40 },
+      { numRuns: 25 },
     );
   });
 
@@ -182,7 +182,7 @@ describe('laws of the bench log', () => {
         expect(grown.entries).toEqual(whole.entries);
         taken += whole.entries[benchWide]?.filter(({ type }) => type === 'voided').length ?? 0;
       }),
-      { numRuns: 40 },
+      { numRuns: 25 },
     );
     expect(taken).toBeGreaterThan(0);
   });

@@ -67,8 +67,8 @@ export const returnLossGrades: readonly ReturnLossGrade[] = [
 ];
 
 export type GradeTelling = { readonly grade: string; readonly unconfirmed: boolean } & (
-  | { readonly tells: 'within the grade’s 97 % limit'; readonly limitDb: number }
-  | { readonly tells: 'above the grade’s 97 % limit'; readonly limitDb: number }
+  | { readonly tells: 'within the 97 % limit of the grade'; readonly limitDb: number }
+  | { readonly tells: 'above the 97 % limit of the grade'; readonly limitDb: number }
   | { readonly tells: 'limit not known' }
 );
 
@@ -86,7 +86,9 @@ export function tellLossGrades(
       .map(({ grade, highest97PercentDb: limitDb, basis }): GradeTelling => {
         const unconfirmed = isUnconfirmed(basis);
         if (limitDb === null) return { grade, unconfirmed, tells: 'limit not known' };
-        const tells = isAtMost(lossDb, limitDb) ? 'within the grade’s 97 % limit' : 'above the grade’s 97 % limit';
+        const tells = isAtMost(lossDb, limitDb)
+          ? 'within the 97 % limit of the grade'
+          : 'above the 97 % limit of the grade';
         return { grade, unconfirmed, tells, limitDb };
       }),
   );
@@ -95,7 +97,7 @@ export function tellLossGrades(
 export interface ReturnLossTelling {
   readonly grade: string;
   readonly unconfirmed: boolean;
-  readonly tells: 'at least the grade’s limit' | 'below the grade’s limit';
+  readonly tells: 'at least the limit of the grade' | 'below the limit of the grade';
   readonly limitDb: number;
 }
 
@@ -110,7 +112,7 @@ export function tellReturnLossGrades(
     grades.map(({ grade, lowestMatedDb: limitDb, basis }) => ({
       grade,
       unconfirmed: isUnconfirmed(basis),
-      tells: isAtLeast(returnLossDb, limitDb) ? 'at least the grade’s limit' : 'below the grade’s limit',
+      tells: isAtLeast(returnLossDb, limitDb) ? 'at least the limit of the grade' : 'below the limit of the grade',
       limitDb,
     })),
   );

@@ -18,7 +18,7 @@ export type MeasuredLoss =
 export type Look = 'first' | 'after cleaning';
 
 export type LossRule =
-  | 'at most the supplier’s own loss'
+  | 'at most the loss that the supplier states'
   | 'at most the maximum acceptable loss'
   | 'above the maximum by less than the margin'
   | 'still above the maximum after cleaning'
@@ -118,7 +118,7 @@ export function judgeAssembly(test: AssemblyTest): Result<LossVerdict, JudgeRefu
     const refusal = checkNumber('supplierLossDb', supplierLossDb, lossTyping.possible);
     if (refusal) return failed(refusal);
     if (isAtMost(decided.value.lossDb, supplierLossDb)) {
-      const rule = 'at most the supplier’s own loss';
+      const rule = 'at most the loss that the supplier states';
       return ok({ verdict: 'accept', rule, ...decided.value, ...limits, limitDb: decimal(supplierLossDb) });
     }
   }
