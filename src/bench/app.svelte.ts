@@ -80,7 +80,7 @@ export class App {
         },
       });
       this.phase = { at: 'running', bench: this.#running.bench };
-      this.away.started(this.#running.bench.openBatches.length > 0);
+      this.away.started(this.#running.bench.openBatches.length > 0 && !this.#running.isNew);
     } catch (error) {
       this.phase = { at: 'not started', fault: faultOf(error) };
     }

@@ -2,7 +2,6 @@ import type { ReadRecipe } from '../core/batch/apply-wide.ts';
 import { foldBatch } from '../core/batch/fold.ts';
 import type { Batch, Bench, Misfit } from '../core/batch/types.ts';
 import type { Command } from '../core/command/commands.ts';
-import { decide } from '../core/command/decide.ts';
 import type { Refusal } from '../core/command/refusal.ts';
 import { benchNow } from '../core/event/bench-time.ts';
 import { benchWide, type Draft, type Entry, type Head, type Line } from '../core/event/entry.ts';
@@ -11,14 +10,13 @@ import type { SummaryRow } from '../core/review/summary-row.ts';
 import type { Moment } from '../core/unit/moment.ts';
 import { failed, ok, type Result } from '../core/unit/result.ts';
 import type { LogStore } from '../log/store.ts';
-import { batchesWithMix, batchToFetch, mixesInQuestion, needsBenchWide } from './at-hand.ts';
-import { derivedRows, rowKeys } from './derived-rows.ts';
 import { Doubts, type Doubt } from './doubts.ts';
 import { extendBench, wholeWide } from './extend-bench.ts';
+import { decide, deciding, derivedRows, readSummaryRows } from './lazy-deciding.ts';
 import { loadBench, type Loaded } from './load-bench.ts';
 import { readLines, type Unreadable } from './read-lines.ts';
 import { registerRow, registerText } from './register-row.ts';
-import { readSummaryRows } from './summary-rows.ts';
+import { rowKeys } from './row-keys.ts';
 
 /** What the log needs to know of the tablet at the instant of writing. Times in ms, `offset` in minutes. */
 export interface TabletClock {
@@ -120,7 +118,7 @@ export class BenchLog {
         const first = await this.#writeOwed();
         if (first === 'moved' || !first.ok) return first;
         await this.#bringToHand(command);
-        const decision = decide(this.bench, command, { now: this.now, by: this.#by });
+        const decision = await decide(this.bench, command, { now: this.now, by: this.#by });
         return decision.ok ? this.#append(decision.value, asked) : decision;
       }),
     );
@@ -227,7 +225,7 @@ export class BenchLog {
     const bench = extendBench(this.bench, entries, this.#options.readRecipe);
     const now = { log: own, bench: made.head.bench, wall: made.head.wall };
     const register = registerText(registerRow(bench, allHeads, unreadable, now));
-    const derived = [{ key: rowKeys.wide, value: register }, ...derivedRows(this.bench, bench, drafts)];
+    const derived = [{ key: rowKeys.wide, value: register }, ...(await derivedRows(this.bench, bench, drafts))];
     if (!head) derived.push({ key: rowKeys.own, value: own });
     try {
       const appended = await this.#options.store.append(head, made.lines, made.head, derived);
@@ -244,6 +242,7 @@ export class BenchLog {
 
   /** Reads what a command rests on and a start leaves aside. */
   async #bringToHand(command: Command): Promise<void> {
+    const { batchesWithMix, batchToFetch, mixesInQuestion, needsBenchWide } = await deciding();
     const batch = batchToFetch(this.bench, command);
     if (batch !== null) await this.#fetchBatch(batch);
     if (needsBenchWide(this.bench, command)) await this.#fetchBenchWide();

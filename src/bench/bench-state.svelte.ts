@@ -56,6 +56,10 @@ export class BenchState {
   /** Reads the time again, and with it which clocks call; answers with the alarms that are new. */
   tick(): readonly Alarm[] {
     this.now = this.#log.now;
+    return this.#lookAtClocks();
+  }
+
+  #lookAtClocks(): readonly Alarm[] {
     const looked = alarms(this.clocks, this.now, this.#raised);
     this.#raised = looked.raised;
     if (looked.alarms.length > 0 || this.calling.length > 0) this.calling = looked.alarms;
@@ -84,7 +88,8 @@ export class BenchState {
   #settle(answer: Answer): void {
     this.saving =
       !answer.ok && answer.error.code === 'not saved' ? { state: 'not saved', ...answer.error } : { state: 'saved' };
-    this.tick();
+    // The time was read with the news; read again, everything that shows it would be made twice.
+    this.#lookAtClocks();
   }
 
   #look(): void {

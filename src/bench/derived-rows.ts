@@ -2,15 +2,7 @@ import type { Batch, Bench } from '../core/batch/types.ts';
 import type { Draft } from '../core/event/entry.ts';
 import { summaryKey, summaryRow } from '../core/review/summary-row.ts';
 import type { Derived } from '../log/store.ts';
-
-/** Keys of the rows that are written with each append, so that a start need not read history. */
-export const rowKeys = {
-  /** Which of the logs here this tablet writes. */
-  own: 'own',
-  wide: 'wide',
-  recipes: 'recipe:',
-  recipe: (hash: string) => `recipe:${hash}`,
-} as const;
+import { rowKeys } from './row-keys.ts';
 
 /** The rows, besides the register, that follow from what an append changed. */
 export function derivedRows(before: Bench, after: Bench, drafts: readonly Draft[]): Derived[] {

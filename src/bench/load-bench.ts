@@ -5,10 +5,9 @@ import { latestTime } from '../core/event/clock.ts';
 import type { Entry, Head } from '../core/event/entry.ts';
 import { sha256 } from '../core/event/hash.ts';
 import type { DerivedRow, LogStore } from '../log/store.ts';
-import { rowKeys } from './derived-rows.ts';
 import { readLines, type Unreadable } from './read-lines.ts';
-import { rebuildBench } from './rebuild-bench.ts';
 import { readRegister, type RegisterRow } from './register-row.ts';
+import { rowKeys } from './row-keys.ts';
 
 /** The bench as it was read, open work alone. */
 export interface Found {
@@ -38,7 +37,7 @@ export async function loadBench(store: LogStore, readRecipe: ReadRecipe, randomI
   ]);
   const register = readRegister(valueOf(wideRows, rowKeys.wide), heads);
   const open = register && (await loadOpen(store, register, readRecipe));
-  const { latest, ...found } = open ?? (await rebuildBench(store, readRecipe));
+  const { latest, ...found } = open ?? (await (await import('./rebuild-bench.ts')).rebuildBench(store, readRecipe));
   const own = (await ownLog(store, valueOf(ownRows, rowKeys.own), heads)) ?? randomId();
   const head = heads.find(({ log }) => log === own) ?? null;
   const others = heads.flatMap(({ log, time }) => (log === own ? [] : [time]));

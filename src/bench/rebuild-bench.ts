@@ -5,9 +5,9 @@ import type { Entry, Line } from '../core/event/entry.ts';
 import { latestTime } from '../core/event/clock.ts';
 import { summaryKey, summaryKeysFrom, summaryRow } from '../core/review/summary-row.ts';
 import type { Derived, LogStore } from '../log/store.ts';
-import { rowKeys } from './derived-rows.ts';
 import type { Found } from './load-bench.ts';
 import { readRows, type ReadLines } from './read-lines.ts';
+import { rowKeys } from './row-keys.ts';
 
 const linesAtOnce = 10_000;
 /** A write of this many rows ends well within a store's patience. */

@@ -1,5 +1,5 @@
 import { benchWide } from '../core/event/entry.ts';
-import { readTakenRecipe } from '../core/recipe/parse.ts';
+import { readTakenRecipe } from '../core/recipe/taken.ts';
 import { createClock } from '../device/clock.ts';
 import { watchClock } from '../device/clock-watch.ts';
 import { randomId } from '../device/random-id.ts';
@@ -13,6 +13,8 @@ import type { Mode } from './mode.ts';
 
 export interface RunningBench {
   readonly bench: BenchState;
+  /** The demo shift was filled in just now: nobody comes back to it. */
+  readonly isNew: boolean;
   /** Finishes what is being written and lets go of the log. */
   stop(): Promise<void>;
 }
@@ -33,7 +35,13 @@ export async function runBench({ mode, version, onSecond, onGone }: RunOptions):
   // A connection that the browser merely lost is opened anew at its next use.
   const gone = (why: Gone) => why !== 'terminated' && onGone(why);
   const store = steadyStore((closed) => openIndexedDbStore(mode.database, closed), { gone });
-  const log = await BenchLog.start({ store, clock, readRecipe: readTakenRecipe, randomId, app: version });
+  const options = { store, clock, readRecipe: readTakenRecipe, randomId, app: version };
+  const isNew = mode.kind === 'demo' && (await store.heads()).length === 0;
+  if (isNew) {
+    const { fillDemo } = await import('./demo/fill-demo.ts');
+    await fillDemo(options);
+  }
+  const log = await BenchLog.start(options);
   // A jump of the clocks is on record before the entry that was about to be made.
   const bench = new BenchState(log, () => void watch.look());
   const tick = startTick();
@@ -44,8 +52,11 @@ export async function runBench({ mode, version, onSecond, onGone }: RunOptions):
     onSecond: () => onSecond(bench, clock.stamp().offset),
   });
   onSecond(bench, clock.stamp().offset);
+  // Says at once where the first entry of the page could not be saved.
+  void bench.note([]);
   return {
     bench,
+    isNew,
     async stop() {
       watch.release();
       tick.release();

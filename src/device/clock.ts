@@ -27,10 +27,21 @@ export interface ClockWindow {
   readonly crypto: RandomSource;
 }
 
+/** The zone's name is asked for again after so long: asking takes about as long as all else that an entry needs. */
+const zoneLastsMs = 60_000;
+
 /** Every read goes through the window, so that a test (or a browser test's fake clock) can stand in its place. */
 export function createClock(window: ClockWindow = globalThis): Clock {
   const page = randomId(12, window.crypto);
   const read = (): ClockReading => ({ wall: window.Date.now(), mono: Math.round(window.performance.now()) });
+  let zone = { name: '', offset: Number.NaN, askedAtMono: 0 };
+  const zoneNow = (offset: number, mono: number): string => {
+    if (offset !== zone.offset || mono - zone.askedAtMono >= zoneLastsMs) {
+      const name = window.Intl.DateTimeFormat().resolvedOptions().timeZone;
+      zone = { name, offset, askedAtMono: mono };
+    }
+    return zone.name;
+  };
   return {
     page,
     read,
@@ -38,7 +49,7 @@ export function createClock(window: ClockWindow = globalThis): Clock {
       const { wall, mono } = read();
       // Zero minutes west must not become minus zero.
       const offset = 0 - new window.Date(wall).getTimezoneOffset();
-      return { wall, mono, page, offset, zone: window.Intl.DateTimeFormat().resolvedOptions().timeZone };
+      return { wall, mono, page, offset, zone: zoneNow(offset, mono) };
     },
   };
 }

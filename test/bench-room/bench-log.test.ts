@@ -98,6 +98,14 @@ describe('asking', () => {
     expect(codeOf(await log.ask({ type: 'sign on', operator: 'MK', shift: 'early' }))).toBeNull();
   });
 
+  it('writes nothing to a batch that is not there', async () => {
+    const place = newPlace();
+    const log = await startOn(place);
+    const seen = await log.ask({ type: 'see clock', batch: 'b9', clock: 'cure:l1:b9', lateS: 3 });
+    expect(codeOf(seen)).toBe('batch unknown');
+    expect(log.misfits).toEqual([]);
+  });
+
   it('takes what is asked at once one after the other', async () => {
     const place = newPlace();
     const log = await startOn(place);
@@ -249,6 +257,15 @@ describe('closing', () => {
     await granted(third, place, short('b1'));
     expect(keysIn(place, 'summary:')).toHaveLength(1);
     expect(await third.summaryRows(0)).toHaveLength(1);
+  });
+
+  it('is not undone while another batch wears the tag; reopening finds a free one', async () => {
+    const { place, log } = await filled();
+    await granted(log, place, short('b1'));
+    await openBatch(log, place, 'b2', 1);
+    expect(codeOf(await log.ask({ type: 'undo', batch: 'b1' }))).toBe('tag taken');
+    await granted(log, place, { type: 'reopen batch', batch: 'b1' });
+    expect(Object.values(log.bench.batches).map(({ tag }) => tag)).toEqual([2, 1]);
   });
 
   it('gives a reopened batch its working life back, however long it was closed', async () => {

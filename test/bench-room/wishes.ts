@@ -105,7 +105,7 @@ const onBatch = fc.oneof(
   { weight: 1, arbitrary: batch.map((id): Wish => () => ({ type: 'hold batch', batch: id, reason: 'lunch' })) },
   { weight: 4, arbitrary: batch.map((id): Wish => () => ({ type: 'resume batch', batch: id })) },
   {
-    weight: 1,
+    weight: 4,
     arbitrary: fc
       .tuple(batch, defect)
       .map(([id, found]): Wish => () => ({ type: 'end batch short', batch: id, defect: found })),
@@ -169,4 +169,4 @@ const onBench = fc.oneof(
   { weight: 1, arbitrary: fc.nat({ max: 4000 }).map((addedS): Wish => () => ({ type: 'state time', addedS })) },
 );
 
-export const wish: fc.Arbitrary<Wish> = fc.oneof({ weight: 3, arbitrary: onBatch }, { weight: 1, arbitrary: onBench });
+export const wish: fc.Arbitrary<Wish> = fc.oneof({ weight: 5, arbitrary: onBatch }, { weight: 1, arbitrary: onBench });

@@ -1,6 +1,6 @@
 import { join } from 'node:path';
 import { bareAppend } from './lib/bare-append.mjs';
-import { openBrowser, usable } from './lib/browser.mjs';
+import { openBrowser } from './lib/browser.mjs';
 import { fillDatabase } from './lib/fill-database.mjs';
 import { importBundled } from './lib/bundle.mjs';
 import { median, quantile } from './lib/figures.mjs';

@@ -33,6 +33,34 @@ test('minutes east of UTC: west is negative, and Greenwich is a plain zero', () 
   expect(Object.is(createClock(fakeClockWindow(0, 0, 0)).stamp().offset, 0)).toBe(true);
 });
 
+test('the zone is asked for again when the offset changed, and after a minute', () => {
+  let now = { mono: 0, minutesWest: -60, zone: 'Europe/Berlin' };
+  let asked = 0;
+  const window: ClockWindow = {
+    ...fakeClockWindow(0, 0, 0),
+    Date: class {
+      static now = () => 0;
+      getTimezoneOffset = () => now.minutesWest;
+    },
+    performance: { now: () => now.mono },
+    Intl: { DateTimeFormat: () => ({ resolvedOptions: () => ({ timeZone: (asked += 1) > 0 ? now.zone : '' }) }) },
+  };
+  const clock = createClock(window);
+  const zones = [];
+  for (const next of [
+    {},
+    { mono: 59_999 },
+    { minutesWest: 0, zone: 'Europe/London' },
+    { zone: 'UTC' },
+    { mono: 119_999 },
+  ]) {
+    now = { ...now, ...next };
+    zones.push(clock.stamp().zone);
+  }
+  expect(zones).toEqual(['Europe/Berlin', 'Europe/Berlin', 'Europe/London', 'Europe/London', 'UTC']);
+  expect(asked).toBe(3);
+});
+
 test('the real window serves as it is', () => {
   const stamp = createClock().stamp();
   expect(stamp.page).toHaveLength(12);

@@ -5,7 +5,8 @@ import { fileURLToPath } from 'node:url';
 export const root = fileURLToPath(new URL('../..', import.meta.url));
 
 /** What is made and not written: the same list as in .gitignore. */
-const made = new Set(['.git', 'node_modules', '.svelte-kit', 'build', '.cache', 'test-results']);
+const folders = new Set(['.git', 'node_modules', 'build', '.cache', 'test-results']);
+const made = { has: (name: string) => folders.has(name) || name.startsWith('.svelte-kit') };
 
 /** Paths of all written files under a folder, from the root of the checkout, with forward slashes. */
 export function filesUnder(folder: string): string[] {

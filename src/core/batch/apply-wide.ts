@@ -2,7 +2,7 @@ import { enteredAt, type Entry, type EntryId } from '../event/entry.ts';
 import type { Recipe } from '../recipe/schema.ts';
 import { shifted } from '../unit/moment.ts';
 import type { MisfitReason } from './misfit-reasons.ts';
-import type { BenchWide, Misfit, OvenHappening } from './types.ts';
+import type { BenchWide, OvenHappening } from './types.ts';
 
 export const emptyBenchWide: BenchWide = {
   tablet: '',
@@ -23,25 +23,34 @@ export const emptyBenchWide: BenchWide = {
 export type ReadRecipe = (text: string) => Recipe | null;
 
 type Register = 'recipes' | 'mixes' | 'ovens' | 'seen';
+type Growing<Key extends Register> = Record<string, BenchWide[Key][string]>;
 
-/** Bench-wide state while it is being folded: its registers are copies and grow in place. */
-export type OpenWide = { -readonly [Key in keyof Omit<BenchWide, Register | 'misfits'>]: BenchWide[Key] } & {
-  readonly [Key in Register]: Record<string, BenchWide[Key][string]>;
-} & {
-  readonly misfits: Misfit[];
+/**
+ * Bench-wide state while it is being folded. A register is copied at its first change and then grows in place: one
+ * that did not change stays the same object, by which others tell.
+ */
+export type OpenWide = { -readonly [Key in keyof BenchWide]: BenchWide[Key] } & {
+  readonly copied: Set<Register>;
   /** Histories of ovens that are copies already. */
   readonly histories: Map<string, OvenHappening[]>;
 };
 
-export function openWide({ recipes, mixes, ovens, seen, misfits, ...rest }: BenchWide): OpenWide {
-  const copies = { recipes: { ...recipes }, mixes: { ...mixes }, ovens: { ...ovens }, seen: { ...seen } };
-  return { ...rest, ...copies, misfits: [...misfits], histories: new Map() };
+export function openWide(wide: BenchWide): OpenWide {
+  return { ...wide, copied: new Set(), histories: new Map() };
+}
+
+function growing<Key extends Register>(wide: OpenWide, key: Key): Growing<Key> {
+  if (!wide.copied.has(key)) {
+    wide[key] = { ...wide[key] };
+    wide.copied.add(key);
+  }
+  return wide[key] as Growing<Key>;
 }
 
 /** Applies one bench-wide entry; one that does not fit changes nothing else and is kept as a misfit. */
 export function applyToWide(wide: OpenWide, entry: Entry, readRecipe: ReadRecipe): void {
   const misfit = change(wide, entry, readRecipe);
-  if (misfit) wide.misfits.push({ entry: { log: entry.log, seq: entry.seq }, type: entry.type, why: misfit });
+  if (misfit) wide.misfits = [...wide.misfits, { entry: bare(entry), type: entry.type, why: misfit }];
 }
 
 function change(wide: OpenWide, entry: Entry, readRecipe: ReadRecipe): MisfitReason | null {
@@ -66,12 +75,12 @@ function change(wide: OpenWide, entry: Entry, readRecipe: ReadRecipe): MisfitRea
     case 'recipeTaken': {
       const recipe = readRecipe(entry.data.text);
       if (!recipe) return 'recipe unknown';
-      wide.recipes[entry.data.hash] = { hash: entry.data.hash, recipe };
+      growing(wide, 'recipes')[entry.data.hash] = { hash: entry.data.hash, recipe };
       return null;
     }
     case 'adhesiveMixed': {
       const { mix: id, adhesive, lot, workingLifeS, roomC } = entry.data;
-      wide.mixes[id] = { id, adhesive, lot, mixed: at, by: entry.by, workingLifeS, roomC };
+      growing(wide, 'mixes')[id] = { id, adhesive, lot, mixed: at, by: entry.by, workingLifeS, roomC };
       return null;
     }
     case 'ovenSet': {
@@ -85,7 +94,7 @@ function change(wide: OpenWide, entry: Entry, readRecipe: ReadRecipe): MisfitRea
     case 'ovenDisturbed':
       return ovenChanged(wide, entry.data.oven, null, { kind: entry.data.what, at, entry: bare(entry) });
     case 'clockSeen':
-      wide.seen[entry.data.clock] = { at, lateS: entry.data.lateS };
+      growing(wide, 'seen')[entry.data.clock] = { at, lateS: entry.data.lateS };
       return null;
     default:
       return 'unknown entry';
@@ -102,7 +111,7 @@ function ovenChanged(wide: OpenWide, id: string, name: string | null, happening:
     wide.histories.set(id, history);
   }
   insertByTime(history, happening);
-  wide.ovens[id] = { id, name: name ?? before?.name ?? id, history };
+  growing(wide, 'ovens')[id] = { id, name: name ?? before?.name ?? id, history };
   return null;
 }
 

@@ -15,7 +15,7 @@ export function foldWide(
   if (counting.length === 0) return from;
   const open = openWide(from);
   for (const entry of counting) applyToWide(open, entry, readRecipe);
-  const { histories: _copies, ...wide } = open;
+  const { copied: _copied, histories: _histories, ...wide } = open;
   return wide;
 }
 

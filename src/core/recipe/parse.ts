@@ -4,9 +4,9 @@ import type { Problem } from './problem.ts';
 import { senseProblems } from './rules/sense.ts';
 import { recipeSchema, type Recipe } from './schema.ts';
 import { shapeProblems } from './shape.ts';
+import { longestRecipe } from './taken.ts';
 
-/** The longest text of a recipe, in UTF-16 code units. */
-export const longestRecipe = 200_000;
+export { longestRecipe, readTakenRecipe } from './taken.ts';
 
 function readShape(text: string): Result<Recipe, Problem[]> {
   if (text.length > longestRecipe) {
@@ -30,13 +30,4 @@ export function readRecipe(text: string): Result<Recipe, Problem[]> {
   if (!shape.ok) return shape;
   const problems = senseProblems(shape.value);
   return problems.length > 0 ? failed(problems) : shape;
-}
-
-/**
- * Reads a recipe that was taken into use earlier: shape only. Its sense was judged when it was taken, and a rule that
- * came later must not make an old batch unreadable.
- */
-export function readTakenRecipe(text: string): Recipe | null {
-  const shape = readShape(text);
-  return shape.ok ? shape.value : null;
 }

@@ -13,6 +13,6 @@ export const alarm = {
     if (urgency === 'due') return about === 'cure' ? 'Cure done. Take the tray out.' : `${subject(about)} done`;
     return about === 'working life' ? 'Working life nearly over' : `${subject(about)} soon done`;
   },
-  late: (span: string) => `called for ${span} now`,
-  others: (count: number) => (count === 1 ? 'and 1 more clock calls' : `and ${count} more clocks call`),
+  late: (span: string) => `It has called for ${span}.`,
+  others: (count: number) => (count === 1 ? '1 more clock calls.' : `${count} more clocks call.`),
 };

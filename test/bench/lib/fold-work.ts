@@ -3,7 +3,7 @@ import type { Bench } from '../../../src/core/batch/types.ts';
 import type { Entry } from '../../../src/core/event/entry.ts';
 import { parseLine } from '../../../src/core/event/line.ts';
 import { inOrder } from '../../../src/core/event/order.ts';
-import { readTakenRecipe } from '../../../src/core/recipe/parse.ts';
+import { readTakenRecipe } from '../../../src/core/recipe/taken.ts';
 
 export { shopLog } from './shop-log.ts';
 

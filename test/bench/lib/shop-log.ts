@@ -3,7 +3,7 @@ import { benchOf } from '../../../src/core/event/bench-time.ts';
 import { nextTime } from '../../../src/core/event/clock.ts';
 import type { Draft, Head, Line } from '../../../src/core/event/entry.ts';
 import { hashOfNothing } from '../../../src/core/event/hash.ts';
-import { recipeSchema } from '../../../src/core/recipe/schema.ts';
+import { recipeSchema, type Recipe } from '../../../src/core/recipe/schema.ts';
 import { courseOf, idMark, courseBatch, type CourseEntry } from './batch-course.ts';
 import { chanceFrom } from './chance.ts';
 
@@ -12,8 +12,8 @@ export interface ShopLogOptions {
   readonly recipeTexts: readonly string[];
   /** How many entries, within one batch. */
   readonly entries: number;
-  /** Batches that are still open at the end, and the step that they have come to, by its kind. */
-  readonly open: readonly { readonly id: string; readonly until: 'cure' | 'inspect' | 'end' }[];
+  /** Batches of 24 that are still open at the end: in the oven, or waiting for their last inspection. */
+  readonly open: readonly { readonly id: string; readonly until: 'cure' | 'inspect' }[];
   /** When the last entry is written, in ms since 1970. */
   readonly endWallMs: number;
   readonly seed: number;
@@ -37,14 +37,22 @@ interface Placed {
   readonly data: string;
 }
 
+interface Course {
+  readonly recipe: Recipe;
+  readonly entries: readonly CourseEntry[];
+}
+
 /** A log of one shop from its first day on: batches that overlap, all decided by the app's rules and chained. */
 export function shopLog(options: ShopLogOptions): ShopLog {
   const chance = chanceFrom(options.seed);
   const recipes = options.recipeTexts.map((text) => recipeSchema.parse(JSON.parse(text)));
   // The text that a batch names is the one that travels in the log, so courses are played on that very text.
-  const courses = recipes.flatMap((recipe) => [8, 12, 24].map((count) => courseOf(recipe, count, chance)));
+  const courses = recipes.flatMap((recipe) =>
+    [8, 12, 24].map((count): Course => ({ recipe, entries: courseOf(recipe, count, chance) })),
+  );
+  const large = courses.filter((_, index) => index % 3 === 2);
   const placed: Placed[] = options.open.flatMap(({ id, until }, index) => {
-    const course = upTo(courses[(index * 3 + 2) % courses.length] ?? [], until);
+    const course = upTo(chosen(large, index % large.length), until);
     const last = course.at(-1)?.atMs ?? 0;
     return place(course, id, index + 1, options.endWallMs - last - index * 90_000);
   });
@@ -53,7 +61,7 @@ export function shopLog(options: ShopLogOptions): ShopLog {
   const front = [...taken, benchWide('benchSet', { tablet: 'Bench 1', operators: ['MK', 'TO'], shifts: [] })];
   let begun = options.endWallMs - dayMs / 8;
   for (let made = 0; placed.length < options.entries - front.length; made += 1) {
-    const course = courses[Math.floor(chance() * courses.length)] ?? [];
+    const course = chosen(courses, Math.floor(chance() * courses.length)).entries;
     const lasts = course.at(-1)?.atMs ?? 0;
     placed.push(...place(course, `made-${made}`, (made % 9) + 4, begun - lasts));
     begun -= everyMs;
@@ -65,14 +73,18 @@ export function shopLog(options: ShopLogOptions): ShopLog {
 
 const benchWide = (type: string, data: object) => ({ batch: 'bench', by: 'MK', type, data: JSON.stringify(data) });
 
-function upTo(course: readonly CourseEntry[], until: 'cure' | 'inspect' | 'end'): readonly CourseEntry[] {
-  if (until === 'end') return course;
-  if (until === 'cure') return course.slice(0, course.findIndex(({ type }) => type === 'loadStarted') + 1);
-  // The first check of one connector alone is the last inspection: all have come to it.
-  return course.slice(
-    0,
-    course.findIndex(({ type, data }) => type === 'judged' && /"connectors":\[\d+\]/.test(data)),
-  );
+function chosen(courses: readonly Course[], index: number): Course {
+  const course = courses[index];
+  if (!course) throw new Error('a shop works by at least one recipe');
+  return course;
+}
+
+function upTo({ recipe, entries }: Course, until: 'cure' | 'inspect'): readonly CourseEntry[] {
+  if (until === 'cure') return entries.slice(0, entries.findIndex(({ type }) => type === 'loadStarted') + 1);
+  const last = recipe.steps.findLast(({ kind, goes }) => kind === 'inspect' && goes === 'connector by connector');
+  // What lags behind is brought up first, so that at the first check of this step all are there.
+  const check = entries.findIndex(({ type, data }) => type === 'judged' && data.includes(`"step":"${last?.id}"`));
+  return entries.slice(0, check);
 }
 
 function place(course: readonly CourseEntry[], id: string, tag: number, begun: number): Placed[] {

@@ -15,7 +15,6 @@ export async function upcToTheEnd(page: Page): Promise<void> {
   await work(page, 17, () => batch.finishAll(page, 12, 'cleaned'));
   await each(page, upTo(4), 10, batch.passOne);
   await work(page, 10, () => batch.sendBack(page, 5, 'Deep single scratch', 'Polish on 1 µm diamond'));
-  await batch.showGroup(page, 'Inspect', 7);
   await each(page, upTo(12, 6), 10, batch.passOne);
   await batch.showGroup(page, 'Measure', 11);
   await each(page, [...upTo(4), ...upTo(12, 6)], 10, batch.passOne);
@@ -52,7 +51,6 @@ export async function flatFacesAndACrack(page: Page): Promise<void> {
   await work(page, 60, () => batch.finishAll(page, 6, 'cleaned'));
   await work(page, 10, () => batch.passOne(page, 1));
   await work(page, 10, () => batch.cutOff(page, 2, 'Crack in the glass', 'Cut the cable, slide the parts on', 45));
-  await batch.showGroup(page, 'Inspect', 4);
   await each(page, upTo(6, 3), 10, batch.passOne);
   await batch.showGroup(page, 'Measure', 5);
   await each(page, [1, ...upTo(6, 3)], 10, batch.passOne);

@@ -45,10 +45,11 @@ export async function choose(page: Page, group: string, label: string | RegExp):
   await expect(choice(page, group, label)).toBeChecked();
 }
 
+const back = (page: Page): Locator => page.getByRole('banner').getByRole('link', { name: en.common.back });
+
 /** Back to the bench, from any page, by the bar at the top. */
 export async function toBench(page: Page): Promise<void> {
-  const back = page.getByRole('banner').getByRole('link', { name: en.common.back });
-  if (await back.isVisible()) await back.tap();
+  if (await back(page).isVisible()) await back(page).tap();
   await expect(page.getByRole('button', { name: en.bench.settings, exact: true })).toBeVisible();
 }
 
@@ -56,4 +57,5 @@ export async function toBench(page: Page): Promise<void> {
 export async function toPage(page: Page, name: 'settings' | 'ovens' | 'start' | 'recipes'): Promise<void> {
   await toBench(page);
   await tap(page, en.bench[name]);
+  await expect(back(page)).toBeVisible();
 }

@@ -41,5 +41,5 @@ export async function addOven(page: Page, name: string, setPointC: string): Prom
   await type(sheet, en.ovens.sheet.name, name);
   await type(sheet, en.ovens.sheet.setPoint, setPointC);
   await press(page, en.ovens.sheet.confirmAdd);
-  await expect(page.getByRole('heading', { name })).toBeVisible();
+  await expect(page.getByRole('heading', { name, exact: true })).toBeVisible();
 }
