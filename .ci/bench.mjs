@@ -79,4 +79,7 @@ await main(async () => {
       ? 'Every aim is met.'
       : `${missed} of ${rows.filter((row) => row.aim !== null).length} aims are missed.`,
   );
+  const faults = rows.flatMap(({ fault }) => fault ?? []);
+  faults.forEach(say);
+  return faults.length === 0 ? 0 : 1;
 });

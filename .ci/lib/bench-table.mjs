@@ -8,6 +8,7 @@
  * @property {number | null} ratio value / floor
  * @property {number | null} aim the highest ratio wanted
  * @property {string} [note] how it was measured, or why it misses its aim
+ * @property {string} [fault] why the run fails, whatever the aim: a count that does not depend on the machine got worse
  */
 
 /** @param {number | null} value */

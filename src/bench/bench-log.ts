@@ -12,7 +12,7 @@ import { failed, ok, type Result } from '../core/unit/result.ts';
 import type { LogStore } from '../log/store.ts';
 import { Doubts, type Doubt } from './doubts.ts';
 import { extendBench, wholeWide } from './extend-bench.ts';
-import { decide, deciding, derivedRows, readSummaryRows } from './lazy-deciding.ts';
+import { decide, derivedRows, later, readSummaryRows } from './load-later.ts';
 import { loadBench, type Loaded } from './load-bench.ts';
 import { readLines, type Unreadable } from './read-lines.ts';
 import { registerRow, registerText } from './register-row.ts';
@@ -242,7 +242,7 @@ export class BenchLog {
 
   /** Reads what a command rests on and a start leaves aside. */
   async #bringToHand(command: Command): Promise<void> {
-    const { batchesWithMix, batchToFetch, mixesInQuestion, needsBenchWide } = await deciding();
+    const { batchesWithMix, batchToFetch, mixesInQuestion, needsBenchWide } = await later();
     const batch = batchToFetch(this.bench, command);
     if (batch !== null) await this.#fetchBatch(batch);
     if (needsBenchWide(this.bench, command)) await this.#fetchBenchWide();

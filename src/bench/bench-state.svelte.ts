@@ -44,8 +44,8 @@ export class BenchState {
     this.#soFar = new ShiftSoFar(this);
   }
 
-  /** Of the shift that runs, from open and closed batches. */
-  get shiftSoFar(): { readonly passed: number; readonly sentBack: number } {
+  /** Of the shift that runs, from open and closed batches; null until they are read. */
+  get shiftSoFar(): { readonly passed: number; readonly sentBack: number } | null {
     return this.#soFar.numbers;
   }
 

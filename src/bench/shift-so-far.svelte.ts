@@ -1,8 +1,7 @@
 import type { Batch } from '../core/batch/types.ts';
-import { shiftOf } from '../core/review/shift.ts';
-import { shiftWindow } from '../core/review/shift-window.ts';
 import type { SummaryRow } from '../core/review/summary-row.ts';
 import type { BenchState } from './bench-state.svelte.ts';
+import { later, type Later } from './load-later.ts';
 import { offsetMinutesAt } from './shift-zone.ts';
 
 type ShiftSource = Pick<BenchState, 'log' | 'bench' | 'now'>;
@@ -13,6 +12,8 @@ type ShiftSource = Pick<BenchState, 'log' | 'bench' | 'now'>;
  */
 export class ShiftSoFar {
   readonly #state: ShiftSource;
+  /** How they are reckoned, once it is loaded. */
+  #reckoning = $state.raw<Pick<Later, 'shiftOf' | 'shiftWindow'> | null>(null);
   #rows = $state.raw<readonly SummaryRow[]>([]);
   #closed = '';
   #reading = 0;
@@ -20,12 +21,14 @@ export class ShiftSoFar {
   /** A window lasts for hours: it is looked up once a minute. */
   readonly #minute = $derived.by(() => Math.floor(this.#state.now.wall / 60_000));
   readonly #window = $derived.by(() =>
-    shiftWindow(this.#state.bench.wide.shifts, this.#minute * 60_000, offsetMinutesAt),
+    this.#reckoning?.shiftWindow(this.#state.bench.wide.shifts, this.#minute * 60_000, offsetMinutesAt),
   );
 
+  /** Null until they are read. */
   readonly numbers = $derived.by(() => {
+    if (!this.#reckoning || !this.#window) return null;
     const { fromWallMs, toWallMs } = this.#window;
-    const summary = shiftOf(this.#rows, Object.values(this.#state.bench.batches), fromWallMs, toWallMs);
+    const summary = this.#reckoning.shiftOf(this.#rows, Object.values(this.#state.bench.batches), fromWallMs, toWallMs);
     return {
       passed: summary.passed,
       sentBack: summary.sendBacks.reduce((sum, { connectors }) => sum + connectors, 0),
@@ -34,7 +37,8 @@ export class ShiftSoFar {
 
   constructor(state: ShiftSource) {
     this.#state = state;
-    void this.#read();
+    // The page first shows what is read already.
+    setTimeout(() => void this.#read(), 0);
     state.log.subscribe(() => {
       const closed = closedIds(state.log.bench.batches);
       if (closed === this.#closed) return;
@@ -48,8 +52,16 @@ export class ShiftSoFar {
     this.#reading += 1;
     const reading = this.#reading;
     try {
-      const rows = await this.#state.log.summaryRows(this.#window.fromWallMs);
-      if (reading === this.#reading) this.#rows = rows;
+      const reckoning = await later();
+      const { fromWallMs } = reckoning.shiftWindow(
+        this.#state.bench.wide.shifts,
+        this.#minute * 60_000,
+        offsetMinutesAt,
+      );
+      const rows = await this.#state.log.summaryRows(fromWallMs);
+      if (reading !== this.#reading) return;
+      this.#reckoning = reckoning;
+      this.#rows = rows;
     } catch {
       // The store does not answer: the next write says so, and the numbers stay as they were.
     }

@@ -67,7 +67,7 @@ describe('the numbers of the running shift', () => {
     const log = await restart(place);
     const state = new BenchState(log);
     const report = new ShiftReport(state);
-    await settled();
+    await vi.waitFor(() => expect(state.shiftSoFar).not.toBeNull());
     expect(state.bench.batches).toEqual({});
     expect(state.shiftSoFar).toEqual({ passed: 0, sentBack: 1 });
     expect(report.summary).toMatchObject({ scrapped: 2, inWork: 0, started: 2 });

@@ -1,5 +1,5 @@
 import { join } from 'node:path';
-import { openBrowser, usable } from './lib/browser.mjs';
+import { noteUsable, openBrowser, usable, usableAtMs } from './lib/browser.mjs';
 import { importBundled } from './lib/bundle.mjs';
 import { byTurns, ratioOf, spread } from './lib/figures.mjs';
 import { fillDatabase } from './lib/fill-database.mjs';
@@ -8,7 +8,7 @@ import { shopRecipes } from './lib/shop-recipes.mjs';
 export const name = 'opening the app on a long log, beside a short one';
 
 const sizes = { long: 200_000, short: 1000 };
-const rounds = 9;
+const rounds = 7;
 
 /** @param {import('../../.ci/bench.mjs').Context} context */
 export async function run(context) {
@@ -86,17 +86,9 @@ async function openedMs({ path, profile, address }) {
   const browser = await openBrowser({ path, profile });
   try {
     const page = await browser.newPage();
-    await page.addInitScript((selector) => {
-      const look = () => {
-        if (document.querySelector(selector) === null) return;
-        watch.disconnect();
-        /** @type {any} */ (globalThis).usableAtMs = performance.now();
-      };
-      const watch = new MutationObserver(look);
-      watch.observe(document, { childList: true, subtree: true });
-    }, usable);
+    await page.addInitScript(noteUsable, usable);
     await page.goto(`${address}/`);
-    const at = await page.waitForFunction(() => /** @type {any} */ (globalThis).usableAtMs, null, { timeout: 60_000 });
+    const at = await page.waitForFunction(usableAtMs, null, { timeout: 60_000 });
     return /** @type {number} */ (await at.jsonValue());
   } finally {
     await browser.close();

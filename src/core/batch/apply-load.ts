@@ -50,7 +50,7 @@ export function applyLoadEnded(batch: OpenBatch, entry: Of<'loadEnded'>, happene
   if (load.ended) return 'load ended already';
   const step = batch.recipe.steps[load.step];
   if (!step) return 'no such step';
-  const inside = batch.connectors.filter((one) => one.stands.at === 'load' && one.stands.load === data.load);
+  const inside = batch.connectors.filter((one) => one.stands.at === 'load' && one.stands.load === load.id);
   const when = settle(inside, happened);
   if (!when) return 'earlier than what it follows';
   const handsOnMs = unattended(step) ? 0 : handsOnShareMs(step, Math.max(1, inside.length), data.gap);

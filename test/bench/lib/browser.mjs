@@ -25,3 +25,18 @@ export async function openBrowser({ path, profile, serviceWorkers = 'allow' }) {
 
 /** The bench is usable once its first button can be pressed. */
 export const usable = 'button.start';
+
+/* The functions below run in the page. */
+
+/** Before the page's own code: notes when what makes the page usable is there. @param {string} selector */
+export function noteUsable(selector) {
+  const watch = new MutationObserver(() => {
+    if (document.querySelector(selector) === null) return;
+    watch.disconnect();
+    /** @type {any} */ (globalThis).usableAtMs = performance.now();
+  });
+  watch.observe(document, { childList: true, subtree: true });
+}
+
+/** Ms from the start of the navigation until then, on the page's own clock; nothing before. @returns {number | undefined} */
+export const usableAtMs = () => /** @type {any} */ (globalThis).usableAtMs;

@@ -7,8 +7,8 @@ import { readTakenRecipe } from '../../../src/core/recipe/taken.ts';
 
 export { shopLog } from './shop-log.ts';
 
-/** What is measured of the fold, over the same lines. */
-export const parseOnly = (texts: readonly string[]): unknown[] => texts.map((text) => JSON.parse(text) as unknown);
+/** Parsed and nothing more: these lines were made here, so that they are entries is known. */
+export const parseOnly = (texts: readonly string[]): Entry[] => texts.map((text) => JSON.parse(text) as Entry);
 
 export function parseWithCheck(texts: readonly string[]): Entry[] {
   return texts.flatMap((text) => {

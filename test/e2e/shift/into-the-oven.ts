@@ -50,7 +50,7 @@ export async function flatIntoTheOven(page: Page): Promise<void> {
 export async function apcHalfIntoTheOven(page: Page): Promise<void> {
   await batch.openBatch(page, apc, 24, '2.5 mm APC 8°, single-mode, by machine');
   await work(page, 60, () => batch.finishAll(page, 24, 'checked'));
-  await work(page, 60, () => batch.see(page, 'Cure done. Take the tray out.', upc, 'called for 0 s now'));
+  await work(page, 60, () => batch.see(page, 'Cure done. Take the tray out.', upc));
   await batch.goTo(page, upc);
   await batch.trayOut(page);
   await batch.goTo(page, apc);

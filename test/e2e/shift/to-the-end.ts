@@ -1,4 +1,5 @@
 import type { Page } from '@playwright/test';
+import { en } from '../../../src/words/en.ts';
 import * as batch from '../steps/batch.ts';
 import { pass, sleep } from '../steps/page-clock.ts';
 import { apc, each, film, finerFilms, flat, strip, upc, upTo, work } from './work.ts';
@@ -107,7 +108,7 @@ export async function apcFirstHalfToTheEnd(page: Page): Promise<void> {
 export async function apcToTheEnd(page: Page): Promise<void> {
   await sleep(page, 300);
   // Due at 131:00, woken at 133:00.
-  await batch.see(page, cureDone, apc, 'called for 2 min now');
+  await batch.see(page, cureDone, apc, en.alarm.late('2 min'));
   await batch.trayOut(page);
   await work(page, 120, () => batch.see(page, cureDone, flat));
   await batch.goTo(page, flat);
