@@ -10,7 +10,7 @@ export default defineConfig({
   workers: 1,
   retries: 0,
   timeout: 90_000,
-  globalTimeout: 480_000,
+  globalTimeout: 780_000,
   expect: { timeout: 10_000 },
   use: {
     ...devices['Desktop Chrome'],

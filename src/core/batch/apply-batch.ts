@@ -107,13 +107,13 @@ function change(batch: OpenBatch, entry: Entry, happened: Happened): MisfitReaso
 
 function connectorsOf(batch: OpenBatch, entry: Entry): readonly number[] {
   if (entry.type === 'loadEnded') {
-    return batch.loads.find((load) => load.id === entry.data.load)?.connectors ?? [];
+    return batch.loads.findLast((load) => load.id === entry.data.load)?.connectors ?? [];
   }
   return 'connectors' in entry.data && entry.type !== 'batchOpened' ? entry.data.connectors : [];
 }
 
 function stepOfEntry(batch: OpenBatch, entry: Entry): number | null {
-  if (entry.type === 'loadEnded') return batch.loads.find((load) => load.id === entry.data.load)?.step ?? null;
+  if (entry.type === 'loadEnded') return batch.loads.findLast((load) => load.id === entry.data.load)?.step ?? null;
   if ('step' in entry.data) return batch.stepIndex(entry.data.step);
   return null;
 }

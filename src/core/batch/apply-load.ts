@@ -44,7 +44,7 @@ export function applyLoadStarted(batch: OpenBatch, entry: Of<'loadStarted'>, hap
 
 export function applyLoadEnded(batch: OpenBatch, entry: Of<'loadEnded'>, happened: Happened): MisfitReason | null {
   const { data } = entry;
-  const position = batch.loads.findIndex((load) => load.id === data.load);
+  const position = batch.loads.findLastIndex((load) => load.id === data.load);
   const load = batch.loads[position];
   if (!load) return 'no such load';
   if (load.ended) return 'load ended already';

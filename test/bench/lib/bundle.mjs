@@ -3,14 +3,12 @@ import { pathToFileURL } from 'node:url';
 import { build } from 'vite';
 
 /**
- * Bundles a TypeScript module as the app is bundled and imports it. Through Vite's module runner every call between
- * modules would go by way of a getter, and the runner would be measured with it.
- * @template {Record<string, unknown>} Module
+ * Bundles a TypeScript module as the app is bundled; answers with the file. Through Vite's module runner every call
+ * between modules would go by way of a getter, and the runner would be measured with it.
  * @param {{ root: string, folder: string }} context
  * @param {string} path from the root of the checkout
- * @returns {Promise<Module>}
  */
-export async function importBundled({ root, folder }, path) {
+export async function bundle({ root, folder }, path) {
   const name = `${path.replace(/\W+/g, '-')}.mjs`;
   await build({
     root,
@@ -26,5 +24,15 @@ export async function importBundled({ root, folder }, path) {
       rolldownOptions: { output: { entryFileNames: name } },
     },
   });
-  return import(pathToFileURL(join(folder, 'bundled', name)).href);
+  return join(folder, 'bundled', name);
+}
+
+/**
+ * @template {Record<string, unknown>} Module
+ * @param {{ root: string, folder: string }} context
+ * @param {string} path from the root of the checkout
+ * @returns {Promise<Module>}
+ */
+export async function importBundled(context, path) {
+  return import(pathToFileURL(await bundle(context, path)).href);
 }

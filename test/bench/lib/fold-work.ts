@@ -20,9 +20,17 @@ export function parseWithCheck(texts: readonly string[]): Entry[] {
 /** Sorts, dedupes, takes out what is voided and applies the rest: the whole fold, given parsed entries. */
 export const fold = (entries: readonly Entry[]): Bench => foldBench(inOrder(entries), readTakenRecipe);
 
-/** Whether the fold did what it is measured for: every batch is there and nothing was a misfit. */
-export function checkFold(bench: Bench, batches: number): void {
-  const found = Object.values(bench.batches);
-  const misfits = bench.wide.misfits.length + found.reduce((sum, batch) => sum + batch.misfits.length, 0);
-  if (found.length !== batches || misfits > 0) throw new Error(`${found.length} batches, ${misfits} misfits`);
+/** How many batches these lines fold to. Throws where one is missing or an entry did not fit: then nothing is measured. */
+export function checkedFold(texts: readonly string[]): number {
+  const entries = parseWithCheck(texts);
+  const { batches, wide } = fold(entries);
+  const found = Object.values(batches);
+  const misfits = wide.misfits.length + found.reduce((sum, batch) => sum + batch.misfits.length, 0);
+  const opened = entries.filter(({ type }) => type === 'batchOpened').length;
+  if (entries.length !== texts.length || found.length !== opened || misfits > 0) {
+    throw new Error(
+      `${entries.length} of ${texts.length} lines, ${found.length} of ${opened} batches, ${misfits} misfits`,
+    );
+  }
+  return found.length;
 }
