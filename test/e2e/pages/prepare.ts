@@ -71,8 +71,8 @@ export async function faces(page: Page): Promise<void> {
 
 /** 12 curing in an oven, 12 that still have to be filled. */
 export async function cures(page: Page): Promise<void> {
-  await batch.openBatch(page, workOrders.cures, 16, apc);
-  await throughTheMix(page, 16, 'B-0117');
+  await batch.openBatch(page, workOrders.cures, 14, apc);
+  await throughTheMix(page, 14, 'B-0117');
   await batch.finish(
     page,
     Array.from({ length: 12 }, (_, index) => index + 1),
