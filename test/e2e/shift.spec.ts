@@ -14,12 +14,13 @@ import { build, cutPower, switchOn, type Tablet } from './steps/tablet.ts';
 
 /** 06:10 on a day of work; the tablet's zone is UTC. */
 const morning = Date.UTC(2026, 0, 15, 6, 10);
-const profile = mkdtempSync(join(tmpdir(), 'lintfree-shift-'));
 const problems: string[] = [];
+let profile: string;
 let serving: Serving;
 let tablet: Tablet;
 
 test.beforeAll(async () => {
+  profile = mkdtempSync(join(tmpdir(), 'lintfree-shift-'));
   serving = await serve({ folder: build, port: 0 });
 });
 test.afterAll(async () => {

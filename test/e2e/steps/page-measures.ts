@@ -28,6 +28,12 @@ export function cutTexts(): string[] {
       if (box.width === 0) continue;
       const say = (how: string) => cut.push(`"${text.slice(0, 40)}" ${how}`);
       if (box.left < -1 || box.right > window.innerWidth + 1) say('sticks out of the window');
+      const control = parent.closest('button, a, label')?.getBoundingClientRect();
+      // A link in a text has the height of its letters.
+      const above = box.height / 3;
+      if (control !== undefined && (box.bottom > control.bottom + above || box.top < control.top - above)) {
+        say('sticks out of its control');
+      }
       for (let frame: Element | null = parent; frame !== null && frame !== body; frame = frame.parentElement) {
         const { display, overflowX, overflowY, position } = getComputedStyle(frame);
         if (display === 'contents') continue;
